@@ -62,9 +62,10 @@ internal sealed class Workbench(Kit kit, Decider decider, IReadOnlySet<string> u
     }
 
     /// <summary>The line from one mark to another, which the caller has decided to be two points.</summary>
-    public DirectedLine Lay(PointMark first, PointMark second, string? name)
+    /// <param name="proved">The line in a simpler form, proved to be the same, where there is one.</param>
+    public DirectedLine Lay(PointMark first, PointMark second, string? name, Line? proved = null)
     {
-        Line line = Line.Through(first.Point, second.Point);
+        Line line = proved is null ? Line.Through(first.Point, second.Point) : proved.WithPoints(first.Point, second.Point);
         if (Standing(line) is { } standing)
             return standing;
         LineMark made = new(name ?? Generate('l'), line, name is null);
