@@ -1,4 +1,3 @@
-using System.Collections.Immutable;
 using System.Diagnostics;
 using System.Numerics;
 using System.Text;
@@ -419,7 +418,7 @@ internal sealed class Evaluator(Decider decider)
         }
     }
 
-    private Value Distance(DistanceMeasure measure)
+    private QuantityValue Distance(DistanceMeasure measure)
     {
         PointValue from = Point(measure.From);
         switch (Resolve(measure.To))
@@ -544,9 +543,9 @@ internal sealed class Evaluator(Decider decider)
         }
     }
 
-    private static Measure? Traced(string function, Measure? of) => of is null ? null : new FunctionMeasure(function, [of]);
+    private static FunctionMeasure? Traced(string function, Measure? of) => of is null ? null : new FunctionMeasure(function, [of]);
 
-    private static Measure? Traced(string function, Value left, Value right)
+    private static FunctionMeasure? Traced(string function, Value left, Value right)
     {
         Measure? a = TraceOf(left), b = TraceOf(right);
         return a is null && b is null ? null : new FunctionMeasure(function, [a ?? Constant(left), b ?? Constant(right)]);

@@ -1,4 +1,3 @@
-using RuleAndCompass.Bench;
 using RuleAndCompass.Numbers;
 
 namespace RuleAndCompass.Making;
@@ -27,7 +26,7 @@ internal static class Kinds
 }
 
 /// <summary>The range of a <c>given</c>.</summary>
-internal readonly record struct Bounds(Rational? Low, Rational? High)
+internal readonly record struct GivenRange(Rational? Low, Rational? High)
 {
     /// <summary>The value as a given: identities in it are sought for every value.</summary>
     public Value Given(string name, Value value) => value switch

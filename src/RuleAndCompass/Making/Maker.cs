@@ -267,13 +267,13 @@ public sealed partial class Maker
                 throw new FaultException(MakingFindings.BadGiven($"`{name}` is {written.KindWithArticle}, and `{text}` is {value.KindWithArticle}", given.Span, "give it in the same kind, with its unit"));
         }
 
-        Bounds bounds = BoundsOf(given, value);
+        GivenRange bounds = BoundsOf(given, value);
         value = bounds.Given(name, value);
         Bind(new Bound(given.Name, [], given.Name.Span), value);
         givens.Add(new(name, value is AngleValue ? QuantityKind.Angle : value is QuantityValue { Dimension: 1 } ? QuantityKind.Length : QuantityKind.Number, fromCaller ? options.Givens![name] : given.Value.ToString()!, fromCaller));
     }
 
-    private Bounds BoundsOf(GivenSentence given, Value value)
+    private GivenRange BoundsOf(GivenSentence given, Value value)
     {
         if (given.From is null || given.To is null)
             return new(null, null);
@@ -363,7 +363,7 @@ public sealed partial class Maker
         for (int branch = 0; branch < block.Branches.Length; branch++)
             if (branch != taken)
                 foreach (Bound bound in block.Branches[branch].Body.SelectMany(Binding.Of))
-                    evaluator.Scope.Leave(bound, $"`{bound.Name.Text}` is bound only in the branch at line {lines.LineOf(bound.Span.Start)}, which was not taken");
+                    evaluator.Scope.Leave(bound, $"`{bound.Name.Text}` is bound only in the branch at line {lines.Find(bound.Span.Start).Line}, which was not taken");
     }
 
     private void Follow(FollowSentence follow)

@@ -1,4 +1,3 @@
-using System.Numerics;
 using RuleAndCompass.Bench;
 using RuleAndCompass.Geometry;
 using RuleAndCompass.Language.Syntax;

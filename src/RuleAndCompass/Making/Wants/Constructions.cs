@@ -19,7 +19,7 @@ internal sealed partial class Constructions(Workbench bench, Sheet room)
     private Decider Decider => bench.Decider;
 
     /// <summary>The sentence at hand, for findings.</summary>
-    public SourceSpan At { get; set; }
+    public SourceSpan Serving { get; set; }
 
     private double Diagonal => Math.Sqrt(Math.Pow(room.Width.ToDouble(), 2) + Math.Pow(room.Height.ToDouble(), 2));
 
@@ -40,7 +40,7 @@ internal sealed partial class Constructions(Workbench bench, Sheet room)
     {
         Crossing crossing = Crossing.Of(Plain(a), Plain(b), Decider);
         if (crossing.Points.Length != 2)
-            throw new FaultException(MakingFindings.Degenerate("the arcs for this do not cross twice", At, "the figures lie too close together, or too far apart for the dividers"));
+            throw new FaultException(MakingFindings.Degenerate("the arcs for this do not cross twice", Serving, "the figures lie too close together, or too far apart for the dividers"));
         return (bench.Cross(a, b, crossing.Points[0], 0, null, Where(crossing, 0, a)), bench.Cross(a, b, crossing.Points[1], 1, null, Where(crossing, 1, a)));
     }
 
@@ -51,7 +51,7 @@ internal sealed partial class Constructions(Workbench bench, Sheet room)
         for (int which = 0; which < crossing.Points.Length; which++)
             if (keep(crossing.Points[which]))
                 return bench.Cross(a, b, crossing.Points[which], which, name, Where(crossing, which, a));
-        throw new FaultException(MakingFindings.Degenerate("the arcs for this do not cross where they should", At, "the figures lie too close together, or too far apart for the dividers"));
+        throw new FaultException(MakingFindings.Degenerate("the arcs for this do not cross where they should", Serving, "the figures lie too close together, or too far apart for the dividers"));
     }
 
     // The words that tell one crossing of two, as seen on the sheet.
@@ -78,7 +78,7 @@ internal sealed partial class Constructions(Workbench bench, Sheet room)
         bool along = IsTheorem(Vector.Cross(drawn, wanted.Direction), inputs) && Decider.Sign(Vector.Dot(drawn, wanted.Direction)) > 0;
         bool through = wanted.IsKnownToHold(first.Point) || wanted.IsKnownToHold(second.Point) || IsTheorem(wanted.SideOf(first.Point), inputs);
         if (!along || !through)
-            throw new FaultException(MakingFindings.ActsDoNotProve(what, At));
+            throw new FaultException(MakingFindings.ActsDoNotProve(what, Serving));
         return bench.Lay(first, second, name, wanted);
     }
 
@@ -88,7 +88,7 @@ internal sealed partial class Constructions(Workbench bench, Sheet room)
         Crossing crossing = Crossing.Of(Plain(a), Plain(b), Decider);
         int which = crossing.Points.Length == 2 && Apart(crossing.Points[1], wanted) < Apart(crossing.Points[0], wanted) ? 1 : 0;
         if (crossing.Points.IsEmpty || !IsTheorem(crossing.Points[which].X - wanted.X, inputs) || !IsTheorem(crossing.Points[which].Y - wanted.Y, inputs))
-            throw new FaultException(MakingFindings.ActsDoNotProve(what, At));
+            throw new FaultException(MakingFindings.ActsDoNotProve(what, Serving));
         return bench.Cross(a, b, wanted, which, name, Where(crossing, which, a));
     }
 
@@ -128,12 +128,12 @@ internal sealed partial class Constructions(Workbench bench, Sheet room)
 
     private bool Holds(Line line, PointMark mark) => Incidence.Holds(mark.Point, line, Decider);
 
-    private FaultException NoTool(string want, string tools) => new(MakingFindings.NoTool(want, tools, At));
+    private FaultException NoTool(string want, string tools) => new(MakingFindings.NoTool(want, tools, Serving));
 
     private void Need(ByTool? by, ByTool tool, bool has)
     {
         if (by == tool && !has)
-            throw new FaultException(MakingFindings.NoTool($"`by {tool.ToString().ToLowerInvariant()}` is asked", $"`{tool.ToString().ToLowerInvariant()}`", At));
+            throw new FaultException(MakingFindings.NoTool($"`by {tool.ToString().ToLowerInvariant()}` is asked", $"`{tool.ToString().ToLowerInvariant()}`", Serving));
     }
 
     private bool HasDividers => Kit.Dividers is not null || Kit.Beam is not null;

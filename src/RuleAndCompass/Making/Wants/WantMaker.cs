@@ -13,7 +13,7 @@ internal sealed partial class WantMaker(Evaluator evaluator, Workbench bench, Co
 
     public void Make(WantSentence want)
     {
-        constructions.At = want.Span;
+        constructions.Serving = want.Span;
         switch (want)
         {
             case PrickAt at:
