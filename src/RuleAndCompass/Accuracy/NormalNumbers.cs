@@ -1,5 +1,4 @@
 using System.Runtime.Intrinsics;
-using RuleAndCompass.Bench.Errors;
 
 namespace RuleAndCompass.Accuracy;
 

@@ -73,8 +73,8 @@ internal readonly record struct LineUse(Point First, Point Last, double FromMill
     /// <summary>How far along a line, from its start, a point lies; millimetres.</summary>
     public static double Along(Line line, Point point)
     {
-        double dx = line.Dx.ToDouble();
-        double dy = line.Dy.ToDouble();
+        double dx = line.Direction.X.ToDouble();
+        double dy = line.Direction.Y.ToDouble();
         return ((point.XMillimetres - line.Start.XMillimetres) * dx + (point.YMillimetres - line.Start.YMillimetres) * dy) / double.Hypot(dx, dy);
     }
 }

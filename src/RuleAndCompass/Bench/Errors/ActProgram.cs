@@ -1,5 +1,4 @@
 using System.Diagnostics;
-using System.Runtime.InteropServices;
 
 namespace RuleAndCompass.Bench.Errors;
 
@@ -95,12 +94,19 @@ internal sealed class ActProgram
             {
                 double x = locate.Point.Point.XMillimetres;
                 double y = locate.Point.Point.YMillimetres;
+                int from = locate.From is { } measuredFrom ? Slot(act, measuredFrom) : -1;
                 slot = AddSlots(x, y);
+                if (from >= 0)
+                {
+                    x -= nominal[from];
+                    y -= nominal[from + 1];
+                }
+
                 int prick = AddVariables(act.Number, (ErrorSource.Prick, hand.PrickMillimetres), (ErrorSource.Prick, hand.PrickMillimetres));
                 int? scale = locate.ByScale
                     ? AddVariables(act.Number, (ErrorSource.Scale, hand.ScaleMillimetres), (ErrorSource.Scale, hand.ScaleMillimetres))
                     : null;
-                return new LocateStep(act.Number, slot, x, y, prick, scale);
+                return new LocateStep(act.Number, slot, x, y, from, prick, scale);
             }
 
             case Lay lay:
@@ -194,8 +200,8 @@ internal sealed class ActProgram
 
     private int AddLine(LineMark line, int start)
     {
-        double dx = line.Line.Dx.ToDouble();
-        double dy = line.Line.Dy.ToDouble();
+        double dx = line.Line.Direction.X.ToDouble();
+        double dy = line.Line.Direction.Y.ToDouble();
         double length = double.Hypot(dx, dy);
         return AddSlots(nominal[start], nominal[start + 1], dx / length, dy / length);
     }
@@ -217,8 +223,4 @@ internal sealed class ActProgram
         variables.Add(new ErrorVariable(first.Source, act, first.Sigma));
         variables.Add(new ErrorVariable(second.Source, act, second.Sigma));
         return variable;
-    }
-
-    /// <summary>The variables as a span, for sums over many.</summary>
-    public ReadOnlySpan<ErrorVariable> VariableSpan() => CollectionsMarshal.AsSpan(variables);
-}
+    }}

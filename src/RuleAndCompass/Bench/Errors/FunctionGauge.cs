@@ -70,7 +70,7 @@ internal sealed class FunctionGauge : Gauge
         (double byFirst, double bySecond) = differentiate(first, second);
         if (!double.IsFinite(byFirst) || !double.IsFinite(bySecond))
         {
-            sweep.MarkSingular();
+            sweep.MarkSingular(0);
             return;
         }
 

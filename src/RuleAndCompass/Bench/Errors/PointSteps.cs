@@ -6,24 +6,36 @@ namespace RuleAndCompass.Bench.Errors;
 /// A point measured by scale: each coordinate has a reading error, and the prick an error each way. Off the printed plate: the plate's scale
 /// errors in place of readings.
 /// </summary>
-internal sealed class LocateStep(int act, int slot, double x, double y, int prick, int? scale) : Step(act)
+/// <param name="x">From the middle of the sheet, or from the point it is measured from.</param>
+/// <param name="y">Likewise.</param>
+/// <param name="from">The point it is measured from; −1 for the middle of the sheet.</param>
+/// <param name="prick">The first of two errors.</param>
+/// <param name="scale">The first of two; null off the plate.</param>
+internal sealed class LocateStep(int act, int slot, double x, double y, int from, int prick, int? scale) : Step(act)
 {
     public override void Need(Slice slice)
     {
+        if (from >= 0)
+            slice.Need(from);
     }
 
     public override void Replay(Span<Vector256<double>> slots, ReadOnlySpan<Vector256<double>> noise)
     {
+        Vector256<double> across = Lanes.All(x) + noise[prick];
+        Vector256<double> up = Lanes.All(y) + noise[prick + 1];
         if (scale is { } reading)
         {
-            slots[slot] = Lanes.All(x) + noise[prick] + noise[reading];
-            slots[slot + 1] = Lanes.All(y) + noise[prick + 1] + noise[reading + 1];
+            across += noise[reading];
+            up += noise[reading + 1];
         }
         else
         {
-            slots[slot] = Lanes.All(x) + noise[ActProgram.PaperAcross] * x + noise[prick];
-            slots[slot + 1] = Lanes.All(y) + noise[ActProgram.PaperUp] * y + noise[prick + 1];
+            across += noise[ActProgram.PaperAcross] * x;
+            up += noise[ActProgram.PaperUp] * y;
         }
+
+        slots[slot] = from < 0 ? across : slots[from] + across;
+        slots[slot + 1] = from < 0 ? up : slots[from + 1] + up;
     }
 
     public override void Pull(Sweep sweep)
@@ -33,6 +45,8 @@ internal sealed class LocateStep(int act, int slot, double x, double y, int pric
         if (px == 0 && py == 0)
             return;
 
+        if (from >= 0)
+            sweep.AddPair(from, px, py);
         sweep.Feel(prick, px);
         sweep.Feel(prick + 1, py);
         if (scale is { } reading)
@@ -107,7 +121,7 @@ internal abstract class CrossStep(int act, int slot, CrossedCurve first, Crossed
         double y = sweep.Value[Slot + 1];
         (double X, double Y) normal = First.Normal(sweep.Value, x, y);
         (double X, double Y) otherNormal = Second.Normal(sweep.Value, x, y);
-        (double share, double otherShare) = sweep.Share(px, py, normal, otherNormal);
+        (double share, double otherShare) = sweep.Share(Act, px, py, normal, otherNormal);
         First.Pull(sweep, x, y, normal, share);
         Second.Pull(sweep, x, y, otherNormal, otherShare);
     }

@@ -21,10 +21,10 @@ internal sealed class Sweep(ActProgram program)
     /// <summary>Slots at their exact places.</summary>
     public double[] Value => program.Nominal;
 
-    /// <summary>True where curves that only touch stand on the way, so that the derivative is not finite.</summary>
-    public bool IsSingular { get; private set; }
+    /// <summary>The act at which the derivative is not finite, as where curves only touch; 0 for the measure itself; null where all is well.</summary>
+    public int? SingularAct { get; private set; }
 
-    public void MarkSingular() => IsSingular = true;
+    public void MarkSingular(int act) => SingularAct = act;
 
     /// <summary>The sensitivities of one result. The list is used again by the next sweep.</summary>
     /// <param name="seed">Called first, to <see cref="Add"/> the result's derivatives.</param>
@@ -34,7 +34,7 @@ internal sealed class Sweep(ActProgram program)
             adjoint = new double[Math.Max(program.SlotCount, 2 * adjoint.Length)];
         found.Clear();
         paper.AsSpan().Clear();
-        IsSingular = false;
+        SingularAct = null;
         highestSlot = -1;
         seed(this);
         if (highestSlot >= 0)
@@ -86,12 +86,12 @@ internal sealed class Sweep(ActProgram program)
     /// A crossing keeps n·dp = (what each curve moves along its normal n there): shares (<paramref name="px"/>, <paramref name="py"/>) out between
     /// the two normals.
     /// </summary>
-    public (double First, double Second) Share(double px, double py, (double X, double Y) first, (double X, double Y) second)
+    public (double First, double Second) Share(int act, double px, double py, (double X, double Y) first, (double X, double Y) second)
     {
         double sine = first.X * second.Y - first.Y * second.X;
         if (Math.Abs(sine) < TouchingSine)
         {
-            IsSingular = true;
+            MarkSingular(act);
             return (0, 0);
         }
 
