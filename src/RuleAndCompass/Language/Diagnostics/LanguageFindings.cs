@@ -9,23 +9,17 @@ internal static class LanguageFindings
 {
     // Words and their order
 
-    internal static Diagnostic UnknownSentenceWord(string word, IEnumerable<string> words, SourceSpan span)
+    internal static Diagnostic UnknownSentenceWord(string found, IEnumerable<string> words, SourceSpan span)
     {
-        string? near = NearName.Find(word, SentenceForms.Words);
+        string? near = NearName.Find(found, SentenceForms.Words);
         return Error(
             "RC1001",
-            $"no sentence begins with `{Clip(word)}`",
+            $"no sentence begins with {Quote(found)}",
             span,
             near is null
                 ? "a sentence begins with a word such as `prick`, `rule`, `strike`, `keep`, `let` or `for`"
                 : $"did you mean `{near}`? For example `{SentenceForms.FindNearest(near, words)}`");
     }
-
-    internal static Diagnostic NoSentenceWord(string found, SourceSpan span) => Error(
-        "RC1001",
-        $"no sentence begins with {Quote(found)}",
-        span,
-        "a sentence begins with a word such as `prick`, `rule`, `strike`, `keep`, `let` or `for`");
 
     internal static Diagnostic Unexpected(string found, IReadOnlyList<string> expected, string? near, string? example, SourceSpan span) => Error(
         "RC1002",
@@ -35,9 +29,9 @@ internal static class LanguageFindings
         : expected is [Rules.AName] && example is not null ? $"put a name before {Quote(found)}, {Example(example)}"
         : expected.Count > 5 ? $"here may stand {Join(expected)}" : Example(example));
 
-    internal static Diagnostic BreaksOff(string last, IReadOnlyList<string> expected, string? example, SourceSpan span) => Error(
+    internal static Diagnostic BreaksOff(string? last, IReadOnlyList<string> expected, string? example, SourceSpan span) => Error(
         "RC1003",
-        expected.Count == 0 ? $"the sentence breaks off after {Quote(last)}" : $"the sentence breaks off after {Quote(last)}; {Join(expected)} is expected",
+        last is null ? $"nothing is written where {Join(expected)} is expected" : expected.Count == 0 ? $"the sentence breaks off after {Quote(last)}" : $"the sentence breaks off after {Quote(last)}; {Join(expected)} is expected",
         span,
         Example(example));
 
@@ -104,8 +98,6 @@ internal static class LanguageFindings
         $"the text of `{sentenceWord}` is taken as it stands and holds no value in braces",
         span,
         "write it out; `{{` is a brace");
-
-    internal static Diagnostic NothingWritten(SourceSpan span) => Error("RC1003", "nothing is written where a value is expected", span, "write a value such as `80 mm` or `43°18'`");
 
     // Signs, numbers and units
 

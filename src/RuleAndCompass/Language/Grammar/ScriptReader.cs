@@ -58,7 +58,7 @@ public static class ScriptReader
         IResult<Expression> result = SentenceGrammar.LoneExpression(stream.Input(0));
         findings.AddRange(stream.Findings);
         if (!result.WasSuccessful && stream.Findings.Count == 0)
-            findings.Add(tokens.Count == 0 ? LanguageFindings.NothingWritten(new SourceSpan(0, text.Length)) : SentenceFault.Explain(stream, "", default));
+            findings.Add(SentenceFault.Explain(stream, "", new SourceSpan(0, text.Length)));
         return new Outcome<Expression>(findings.Count == 0 ? result.Value : null, InOrder(findings, limits));
     }
 
@@ -88,7 +88,7 @@ public static class ScriptReader
         if (first.Kind != TokenKind.Word || !SentenceForms.Begins(first.Text))
         {
             string written = text.Substring(first.Span.Start, first.Span.Length);
-            findings.Add(first.Kind == TokenKind.Word ? LanguageFindings.UnknownSentenceWord(first.Text, tokens.GetRange(start, end - start).Select(token => token.Text), first.Span) : LanguageFindings.NoSentenceWord(written, first.Span));
+            findings.Add(LanguageFindings.UnknownSentenceWord(written, tokens.GetRange(start, end - start).Select(token => token.Text), first.Span));
             blocks.AddBad(Meant(first), first, UnreadName.Find(tokens, start, end, Meant(first)));
             return end;
         }

@@ -24,7 +24,7 @@ internal static class SentenceFault
         if (OpenBracket(stream, at) is { } open && !Closes(stream, at, open))
             return LanguageFindings.BracketNotClosed(open.Text, open.Span);
         if (found.Kind == TokenKind.End)
-            return at == 0 ? LanguageFindings.BreaksOff("{", expected, example, emptySpan) : LanguageFindings.BreaksOff(Written(stream, before), expected, example, before.Span);
+            return LanguageFindings.BreaksOff(at == 0 ? null : Written(stream, before), expected, example, at == 0 ? emptySpan : before.Span);
         if (found.FirstOnLine && before.IsSign(",") && SentenceForms.Begins(found.Text) && !Looks(expected, found))
             return LanguageFindings.CommaBeforeSentence(found.Text, before.Span);
 
