@@ -67,6 +67,23 @@ internal sealed class MarkIndex(Decider decider)
         return null;
     }
 
+    /// <summary>The first drawn line that runs along <paramref name="way"/> or against it; null where none does.</summary>
+    public LineMark? FindParallel(Vector way)
+    {
+        LineMark? first = null;
+        long cell = Cell(way);
+        for (long near = cell - 1; near <= cell + 1; near++)
+            if (lines.TryGetValue(Wrapped(near), out List<LineMark>? here))
+                foreach (LineMark mark in here)
+                    if (IsZero(Vector.Cross(mark.Line.Direction, way)))
+                    {
+                        first ??= mark;
+                        break;
+                    }
+
+        return first;
+    }
+
     /// <summary>True where both are proved to be one point; one that cannot be decided counts as another.</summary>
     public bool IsSame(Point a, Point b) => ReferenceEquals(a, b) || (IsNear(a.X, b.X) && IsNear(a.Y, b.Y) && IsZero(a.X - b.X) && IsZero(a.Y - b.Y));
 
@@ -96,9 +113,11 @@ internal sealed class MarkIndex(Decider decider)
 
     private static (long X, long Y) Cell(Point point) => ((long)Math.Floor(point.XMillimetres / CellMillimetres), (long)Math.Floor(point.YMillimetres / CellMillimetres));
 
-    private static long Cell(Line line)
+    private static long Cell(Line line) => Cell(line.Direction);
+
+    private static long Cell(Vector way)
     {
-        double turn = Math.Atan2(line.Direction.Y.ToDouble(), line.Direction.X.ToDouble());
+        double turn = Math.Atan2(way.Y.ToDouble(), way.X.ToDouble());
         return Wrapped((long)Math.Floor((turn < 0 ? turn + Math.PI : turn) / CellRadians));
     }
 
