@@ -32,7 +32,7 @@ internal sealed partial class Constructions
         string how = Steps(step);
         string off = Kit.ScaleStep is null ? ", taken off the full-size plate," : "";
         string says = how.Length == 0 ? $"Prick {{}} at {start}." : $"Measure {how} from {start}{off} and prick {{}}.";
-        return bench.Locate(at, name, says);
+        return bench.Locate(at, name, says, from);
     }
 
     private ScaleOpening ByScale(Real length) => new(length, Kit.ScaleStep is { } step ? Rounded(length, step) : null);
