@@ -36,13 +36,19 @@ public abstract record Opening
 {
     /// <summary>The exact span, millimetres.</summary>
     public abstract Real Length { get; }
+
+    /// <summary>Its square: one value for every arc at this opening.</summary>
+    public abstract Real Squared { get; }
 }
 
 /// <summary>The span of two points that stand on the stock.</summary>
-public sealed record SpanOpening(PointMark First, PointMark Second, Real Span) : Opening
+public sealed record SpanOpening(PointMark First, PointMark Second) : Opening
 {
     /// <inheritdoc/>
-    public override Real Length => Span;
+    public override Real Length { get; } = First.Point.DistanceTo(Second.Point);
+
+    /// <inheritdoc/>
+    public override Real Squared { get; } = First.Point.SquaredDistanceTo(Second.Point);
 }
 
 /// <summary>A length off the scale. <paramref name="Wanted"/> is exact; <paramref name="Setting"/> is rounded to the scale's step, what the sentence tells; null where it is taken off the full-size plate.</summary>
@@ -50,13 +56,19 @@ public sealed record ScaleOpening(Real Wanted, Rational? Setting) : Opening
 {
     /// <inheritdoc/>
     public override Real Length => Wanted;
+
+    /// <inheritdoc/>
+    public override Real Squared { get; } = Wanted * Wanted;
 }
 
 /// <summary>Any opening would do; this one was chosen.</summary>
 public sealed record FreeOpening(Rational Chosen) : Opening
 {
     /// <inheritdoc/>
-    public override Real Length => Chosen;
+    public override Real Length { get; } = Chosen;
+
+    /// <inheritdoc/>
+    public override Real Squared { get; } = Chosen * Chosen;
 }
 
 /// <summary>Set the dividers (or the beam compass).</summary>

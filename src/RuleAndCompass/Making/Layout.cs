@@ -203,6 +203,9 @@ public sealed record MakingOptions(
     /// <summary>The most acts a layout may have.</summary>
     public int MaximumActs { get; init; } = 50_000;
 
+    /// <summary>The most sentences that are carried out, those in loops and recipes counted each time.</summary>
+    public int MaximumSentences { get; init; } = 1_000_000;
+
     /// <summary>How deep blocks, recipes and expressions may nest.</summary>
     public int MaximumNesting { get; init; } = 100;
 }

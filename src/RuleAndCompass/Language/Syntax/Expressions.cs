@@ -1,11 +1,16 @@
 using System.Collections.Immutable;
 using RuleAndCompass.Language.Diagnostics;
+using RuleAndCompass.Language.Grammar;
 using RuleAndCompass.Numbers;
 
 namespace RuleAndCompass.Language.Syntax;
 
 /// <summary>A piece of a script. Its <c>ToString</c> prints it back as the tidy printer does.</summary>
-public abstract record Node(SourceSpan Span);
+public abstract record Node(SourceSpan Span)
+{
+    /// <summary>The node as it is written in a sentence.</summary>
+    public sealed override string ToString() => TidyPrinter.Print(this);
+}
 
 /// <summary>A word that is not a little word: <c>O</c>, <c>noon</c>.</summary>
 public sealed record Name(string Text, SourceSpan Span) : Node(Span);

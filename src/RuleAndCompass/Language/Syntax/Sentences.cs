@@ -3,11 +3,18 @@ using RuleAndCompass.Language.Diagnostics;
 
 namespace RuleAndCompass.Language.Syntax;
 
-/// <summary>A whole script. Comments are kept apart, for the printer.</summary>
+/// <summary>A whole script, as far as it could be read. Comments are kept apart, for the printer.</summary>
 /// <param name="Name">What diagnostics and outputs call it, usually the file's name without folders.</param>
 /// <param name="Text">As read.</param>
 /// <param name="Sentences">In order; blocks hold their own.</param>
-public sealed record Script(string Name, string Text, ImmutableArray<Sentence> Sentences);
+public sealed record Script(string Name, string Text, ImmutableArray<Sentence> Sentences)
+{
+    /// <summary>The comments in order.</summary>
+    public ImmutableArray<Comment> Comments { get; init; } = [];
+
+    /// <summary>Names that sentences left out of the tree would have bound, titles of recipes among them: that they are missing has been told already.</summary>
+    public ImmutableHashSet<string> UnreadNames { get; init; } = [];
+}
 
 /// <summary>One sentence, or a block with the sentences in it.</summary>
 public abstract record Sentence(SourceSpan Span) : Node(Span);

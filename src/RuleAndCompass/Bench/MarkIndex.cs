@@ -1,0 +1,125 @@
+using RuleAndCompass.Geometry;
+using RuleAndCompass.Numbers;
+
+namespace RuleAndCompass.Bench;
+
+/// <summary>
+/// Finds the mark that already stands where a new one is wanted. Doubles sort the marks into cells so that few are looked at;
+/// whether two figures are the same is decided exactly.
+/// </summary>
+internal sealed class MarkIndex(Decider decider)
+{
+    // Far coarser than the error of the doubles and far finer than marks at a bench: it only bounds the candidates.
+    private const double CellMillimetres = 1e-6;
+    private const double CellRadians = 1e-7;
+    private const double HalfTurnCells = Math.PI / CellRadians;
+
+    private readonly Dictionary<(long X, long Y), List<PointMark>> points = [];
+    private readonly Dictionary<long, List<LineMark>> lines = [];
+    private readonly Dictionary<(long X, long Y), List<CircleMark>> circles = [];
+
+    public void Add(Mark mark)
+    {
+        switch (mark)
+        {
+            case PointMark point:
+                AddTo(points, Cell(point.Point), point);
+                break;
+            case LineMark line:
+                AddTo(lines, Cell(line.Line), line);
+                break;
+            case CircleMark circle:
+                AddTo(circles, Cell(circle.Circle.Centre), circle);
+                break;
+        }
+    }
+
+    public PointMark? Find(Point wanted)
+    {
+        foreach ((long X, long Y) cell in Around(Cell(wanted)))
+            if (points.TryGetValue(cell, out List<PointMark>? here))
+                foreach (PointMark mark in here)
+                    if (IsSame(mark.Point, wanted))
+                        return mark;
+        return null;
+    }
+
+    public LineMark? Find(Line wanted)
+    {
+        long cell = Cell(wanted);
+        for (long near = cell - 1; near <= cell + 1; near++)
+            if (lines.TryGetValue(Wrapped(near), out List<LineMark>? here))
+                foreach (LineMark mark in here)
+                    if (IsSame(mark.Line, wanted))
+                        return mark;
+        return null;
+    }
+
+    public CircleMark? Find(Circle wanted)
+    {
+        foreach ((long X, long Y) cell in Around(Cell(wanted.Centre)))
+            if (circles.TryGetValue(cell, out List<CircleMark>? here))
+                foreach (CircleMark mark in here)
+                    if (IsNear(mark.Circle.RadiusSquared, wanted.RadiusSquared)
+                        && (ReferenceEquals(mark.Circle.RadiusSquared, wanted.RadiusSquared) || IsZero(mark.Circle.RadiusSquared - wanted.RadiusSquared))
+                        && IsSame(mark.Circle.Centre, wanted.Centre))
+                        return mark;
+        return null;
+    }
+
+    /// <summary>True where both are proved to be one point; one that cannot be decided counts as another.</summary>
+    public bool IsSame(Point a, Point b) => ReferenceEquals(a, b) || (IsNear(a.X, b.X) && IsNear(a.Y, b.Y) && IsZero(a.X - b.X) && IsZero(a.Y - b.Y));
+
+    private bool IsSame(Line a, Line b)
+    {
+        double ax = a.Direction.X.ToDouble(), ay = a.Direction.Y.ToDouble();
+        double sx = b.Start.XMillimetres - a.Start.XMillimetres, sy = b.Start.YMillimetres - a.Start.YMillimetres;
+        if (Math.Abs((ax * sy) - (ay * sx)) > CellMillimetres * 10 * Math.Sqrt((ax * ax) + (ay * ay)) * Math.Max(1, Math.Sqrt((sx * sx) + (sy * sy))))
+            return false;
+        int shared = b.Holds.Count(a.IsKnownToHold);
+        if (shared >= 2)
+            return true;
+        return IsZero(Vector.Cross(a.Direction, b.Direction)) && (shared == 1 || a.IsKnownToHold(b.Start) || IsZero(a.SideOf(b.Start)));
+    }
+
+    private bool IsZero(Real value)
+    {
+        Decision decision = decider.Decide(value);
+        return decision.IsZero;
+    }
+
+    private static bool IsNear(Real a, Real b)
+    {
+        double first = a.ToDouble(), second = b.ToDouble();
+        return Math.Abs(first - second) <= CellMillimetres * Math.Max(1, Math.Abs(first));
+    }
+
+    private static (long X, long Y) Cell(Point point) => ((long)Math.Floor(point.XMillimetres / CellMillimetres), (long)Math.Floor(point.YMillimetres / CellMillimetres));
+
+    private static long Cell(Line line)
+    {
+        double turn = Math.Atan2(line.Direction.Y.ToDouble(), line.Direction.X.ToDouble());
+        return Wrapped((long)Math.Floor((turn < 0 ? turn + Math.PI : turn) / CellRadians));
+    }
+
+    private static long Wrapped(long cell)
+    {
+        long whole = (long)HalfTurnCells;
+        return ((cell % whole) + whole) % whole;
+    }
+
+    private static IEnumerable<(long X, long Y)> Around((long X, long Y) cell)
+    {
+        for (long x = cell.X - 1; x <= cell.X + 1; x++)
+            for (long y = cell.Y - 1; y <= cell.Y + 1; y++)
+                yield return (x, y);
+    }
+
+    private static void AddTo<TKey, TMark>(Dictionary<TKey, List<TMark>> cells, TKey cell, TMark mark)
+        where TKey : notnull
+    {
+        if (!cells.TryGetValue(cell, out List<TMark>? here))
+            cells.Add(cell, here = []);
+        here.Add(mark);
+    }
+}

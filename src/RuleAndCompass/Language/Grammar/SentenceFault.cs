@@ -1,0 +1,103 @@
+using System.Collections.Immutable;
+using RuleAndCompass.Language.Diagnostics;
+
+namespace RuleAndCompass.Language.Grammar;
+
+/// <summary>Says why a sentence could not be read, from the farthest place that reading came to and what was expected there.</summary>
+internal static class SentenceFault
+{
+    /// <summary>The one finding for a sentence whose shape is wrong.</summary>
+    /// <param name="stream">After the failed reading.</param>
+    /// <param name="sentenceWord">The word it begins with, for the example in the hint; empty for an expression alone.</param>
+    /// <param name="emptySpan">What to show where there is no token at all.</param>
+    public static Diagnostic Explain(TokenStream stream, string sentenceWord, SourceSpan emptySpan)
+    {
+        int at = stream.Farthest;
+        Token found = stream[at];
+        Token before = at > 0 ? stream[at - 1] : found;
+        ImmutableArray<string> expected = [.. stream.Expected.Where(what => what != Rules.TheEnd)];
+        bool mayEnd = stream.Expected.Contains(Rules.TheEnd);
+
+        if (found.Kind == TokenKind.Sign && found.Text is ")" or "]" && OpenBracket(stream, at) is null)
+            return LanguageFindings.BracketNotOpened(found.Text, found.Span);
+        if (OpenBracket(stream, at) is { } open && !Closes(stream, at, open))
+            return LanguageFindings.BracketNotClosed(open.Text, open.Span);
+        if (found.Kind == TokenKind.End)
+            return at == 0 ? LanguageFindings.BreaksOff("{", expected, sentenceWord, emptySpan) : LanguageFindings.BreaksOff(Written(stream, before), expected, sentenceWord, before.Span);
+        if (found.FirstOnLine && before.IsSign(",") && Vocabulary.IsSentenceWord(found.Text) && !Looks(expected, found))
+            return LanguageFindings.CommaBeforeSentence(found.Text, before.Span);
+
+        if (found.Kind == TokenKind.Word)
+        {
+            if (expected.Contains(Rules.AName) && Vocabulary.LittleWords.Contains(found.Text) && ReadsOnAsName(stream, at, sentenceWord))
+                return LanguageFindings.LittleWordAsName(found.Text, found.Span);
+            string? near = Near(found.Text, expected);
+            if (near is null && before.Kind == TokenKind.Number && !Vocabulary.LittleWords.Contains(found.Text)
+                && (!Vocabulary.Holds(found.Text) || Vocabulary.UnitHabits.ContainsKey(found.Text)))
+                return LanguageFindings.UnknownUnit(found.Text, found.Span);
+            if (near is null && Vocabulary.Units.Contains(found.Text) && (before.Kind == TokenKind.Word || before.IsSign(")") || before.IsSign("]")))
+                return LanguageFindings.UnitAfterValue(found.Text, found.Span);
+            return mayEnd
+                ? LanguageFindings.TooManyWords(found.Text, near, expected, found.Span)
+                : LanguageFindings.Unexpected(found.Text, expected, near, sentenceWord, found.Span);
+        }
+
+        string written = Written(stream, found);
+        return mayEnd
+            ? LanguageFindings.TooManyWords(written, null, expected, found.Span)
+            : LanguageFindings.Unexpected(written, expected, null, sentenceWord, found.Span);
+    }
+
+    private static string Written(TokenStream stream, Token token) => stream.Text.Substring(token.Span.Start, token.Span.Length);
+
+    private static bool Looks(ImmutableArray<string> expected, Token found) => expected.Contains($"`{found.Text}`");
+
+    private static string? Near(string word, ImmutableArray<string> expected) =>
+        NearName.Find(word, expected.Where(what => what[0] == '`' && char.IsLetter(what[1])).Select(what => what[1..^1]));
+
+    // The innermost bracket that is open before a place.
+    private static Token? OpenBracket(TokenStream stream, int at)
+    {
+        Stack<Token> open = new();
+        for (int i = 0; i < at; i++)
+        {
+            Token token = stream[i];
+            if (token.IsSign("(") || token.IsSign("["))
+                open.Push(token);
+            else if ((token.IsSign(")") || token.IsSign("]")) && open.Count > 0)
+                open.Pop();
+        }
+
+        return open.Count > 0 ? open.Peek() : null;
+    }
+
+    // Whether the bracket is closed at or after a place, by one of its own kind.
+    private static bool Closes(TokenStream stream, int at, Token open)
+    {
+        string close = open.Text == "(" ? ")" : "]";
+        int depth = 0;
+        for (int i = at; i < stream.Count; i++)
+        {
+            Token token = stream[i];
+            if (token.IsSign("(") || token.IsSign("["))
+                depth++;
+            else if ((token.IsSign(")") || token.IsSign("]")) && depth-- == 0)
+                return token.Text == close;
+        }
+
+        return false;
+    }
+
+    // With a plain name in its place the sentence reads on past the word after it: then it is a name in all but spelling, and none is missing.
+    private static bool ReadsOnAsName(TokenStream stream, int at, string sentenceWord)
+    {
+        List<Token> tokens = [];
+        for (int i = 0; i < stream.Count; i++)
+            tokens.Add(i == at ? stream[i] with { Text = "A" } : stream[i]);
+        TokenStream trial = new(stream.Text, tokens, 0, tokens.Count, stream.Limits);
+        bool read = sentenceWord.Length > 0
+            ? SentenceGrammar.Sentence(trial.Input(0)).WasSuccessful
+            : SentenceGrammar.LoneExpression(trial.Input(0)).WasSuccessful;
+        return read || trial.Farthest > at + 1;
+    }
+}

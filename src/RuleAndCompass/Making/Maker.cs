@@ -1,0 +1,502 @@
+using System.Collections.Immutable;
+using System.Diagnostics;
+using System.Security.Cryptography;
+using System.Text;
+using RuleAndCompass.Bench;
+using RuleAndCompass.Language.Diagnostics;
+using RuleAndCompass.Language.Grammar;
+using RuleAndCompass.Language.Syntax;
+using RuleAndCompass.Making.Wants;
+using RuleAndCompass.Numbers;
+
+namespace RuleAndCompass.Making;
+
+/// <summary>Carries a script out: text in, layout out.</summary>
+public sealed partial class Maker
+{
+    private readonly MakingOptions options;
+    private readonly IProgress<double>? progress;
+    private readonly CancellationToken cancellation;
+    private readonly Script script;
+    private readonly Head head;
+    private readonly Decider decider;
+    private readonly Evaluator evaluator;
+    private readonly Workbench bench;
+    private readonly Constructions constructions;
+    private readonly StageBook stages;
+    private readonly RecipeShelf recipes;
+    private readonly List<Diagnostic> findings = [];
+    private readonly List<GivenValue> givens = [];
+    private readonly List<ClaimResult> claims = [];
+    private readonly List<Comparison> comparisons = [];
+    private readonly List<Kept> kept = [];
+    private readonly List<Lettering> letterings = [];
+    private readonly List<string> notes = [];
+    private readonly List<string> following = [];
+    private readonly HashSet<string> givenNames = new(StringComparer.Ordinal);
+    private readonly long deadline;
+    private (SourceSpan Span, string Recipe)? followed;
+    private bool isDial;
+    private int carriedOut;
+    private int nesting;
+
+    private Maker(Script script, Head head, RecipeShelf recipes, MakingOptions options, IProgress<double>? progress, CancellationToken cancellation)
+    {
+        this.script = script;
+        this.head = head;
+        this.recipes = recipes;
+        this.options = options;
+        this.progress = progress;
+        this.cancellation = cancellation;
+        TimeSpan limit = options.TimeLimit ?? TimeSpan.MaxValue;
+        deadline = limit == TimeSpan.MaxValue ? long.MaxValue : Environment.TickCount64 + (long)limit.TotalMilliseconds;
+        decider = new(new DeciderOptions(SHA256.HashData(Encoding.UTF8.GetBytes(script.Text)), options.Prove, TimeLimit: options.TimeLimit), cancellation);
+        evaluator = new(decider);
+        bench = new(head.Kit, decider, Binding.NamesIn(script.Sentences), options.MaximumActs);
+        constructions = new(bench, head.Room);
+        stages = new(head.Title ?? "The layout");
+    }
+
+    /// <summary>Reads a script and carries it out.</summary>
+    /// <returns>
+    /// The layout, or null where the script is wrong. A refuted claim and a comparison out of tolerance are errors that leave the layout standing.
+    /// Findings are in source order.
+    /// </returns>
+    /// <param name="name">What diagnostics and outputs call the script.</param>
+    /// <param name="text">The script.</param>
+    /// <param name="options">What the caller changes.</param>
+    /// <param name="progress">Told the part of the sentences done, 0 to 1.</param>
+    /// <param name="cancellation">Ends the making with an <see cref="OperationCanceledException"/>.</param>
+    public static Outcome<Layout> Make(string name, string text, MakingOptions? options = null, IProgress<double>? progress = null, CancellationToken cancellation = default)
+    {
+        Outcome<Script> read = ScriptReader.Read(name, text, cancellation: cancellation);
+        if (read.Value is null)
+            return new(null, read.Diagnostics);
+        Outcome<Layout> made = Make(read.Value, options, progress, cancellation);
+        ImmutableArray<Diagnostic> all = [.. read.Diagnostics.Concat(made.Diagnostics).OrderBy(finding => finding.Span.Start)];
+        return read.HasErrors ? new(null, all) : new(made.Value, all);
+    }
+
+    /// <summary>Carries out a script that has been read.</summary>
+    /// <inheritdoc cref="Make(string, string, MakingOptions?, IProgress{double}?, CancellationToken)"/>
+    public static Outcome<Layout> Make(Script script, MakingOptions? options = null, IProgress<double>? progress = null, CancellationToken cancellation = default)
+    {
+        options ??= new();
+        List<Diagnostic> headFindings = [];
+        Head head = Head.Of(script, options, headFindings);
+        RecipeShelf recipes = RecipeShelf.For(script, options, headFindings, cancellation);
+        Maker maker = new(script, head, recipes, options, progress, cancellation);
+        maker.findings.AddRange(headFindings);
+        return maker.CarryOut();
+    }
+
+    private Outcome<Layout> CarryOut()
+    {
+        evaluator.Scope = new(null, "");
+        bool finished = false;
+        try
+        {
+            CarryOut(script.Sentences, outermost: true);
+            finished = true;
+        }
+        catch (TooManyActsException limit)
+        {
+            findings.Add(MakingFindings.Limit("the script asks for too many acts", $"{limit.Limit}", script.Sentences[^1].Span, "divide the work over several scripts"));
+        }
+        catch (FaultException fault) when (fault.Finding is not null)
+        {
+            findings.Add(fault.Finding);
+        }
+
+        foreach (string given in options.Givens?.Keys ?? [])
+            if (finished && !givenNames.Contains(given))
+            {
+                string? near = NearName.Find(given, givenNames);
+                findings.Add(MakingFindings.BadGiven($"the script has no `given {given}`", default, near is null ? null : $"is `{near}` meant?"));
+            }
+
+        ImmutableArray<Diagnostic> sorted = [.. findings.OrderBy(finding => finding.Span.Start)];
+        bool stands = finished && findings.All(finding => finding.Severity != Severity.Error || finding.Code is "RC2024" or "RC2026");
+        return new(stands ? Result() : null, sorted);
+    }
+
+    private Layout Result() => new(
+        script, head.Title ?? "", [.. notes], head.Sheet, head.Board, head.Kit, head.Hand, [.. givens], [.. stages.Stages], [.. bench.Acts], [.. claims],
+        [.. comparisons.Select(comparison => comparison with { FarEnd = FarEnd.Of(comparison, kept) })], [.. kept], [.. letterings], isDial || RecipeShelf.SpeaksOfDials(head.Title))
+    {
+        Decider = decider,
+    };
+
+    private void CarryOut(ImmutableArray<Sentence> sentences, bool outermost = false)
+    {
+        int stageBefore = stages.Current;
+        for (int index = 0; index < sentences.Length; index++)
+        {
+            CarryOut(sentences[index], outermost);
+            if (outermost)
+                progress?.Report((index + 1.0) / sentences.Length);
+        }
+
+        stages.Close(stageBefore, bench.Acts.Count);
+    }
+
+    private void CarryOut(Sentence sentence, bool outermost)
+    {
+        cancellation.ThrowIfCancellationRequested();
+        if (++carriedOut > options.MaximumSentences)
+            throw new FaultException(Placed(MakingFindings.Limit("too many sentences are carried out", $"{options.MaximumSentences}", sentence.Span, "look for a loop that runs too long")));
+        if (Environment.TickCount64 > deadline)
+            throw new FaultException(Placed(MakingFindings.Limit("the time allowed has run out here", $"{options.TimeLimit!.Value.TotalSeconds:0.#} s", sentence.Span, "raise `--time-limit`")));
+        try
+        {
+            Dispatch(sentence, outermost);
+        }
+        catch (FaultException fault) when (fault.Finding?.Code != "RC2032")
+        {
+            Add(fault.Finding);
+            Leave(sentence, null);
+        }
+        catch (UndecidedException undecided)
+        {
+            Add(MakingFindings.Undecided(undecided.Message, undecided.Known, sentence.Span));
+            Leave(sentence, null);
+        }
+    }
+
+    private void Dispatch(Sentence sentence, bool outermost)
+    {
+        switch (sentence)
+        {
+            case TitleSentence or SheetSentence or BoardSentence or KitSentence or HandSentence:
+                if (!outermost)
+                    throw new FaultException(MakingFindings.HeadOutOfPlace("a head sentence stands in a block", sentence.Span, "the title, sheet, board, kit and hand come first in a script"));
+                break;
+            case UseSentence or RecipeBlock when outermost:
+                break;
+            case UseSentence or RecipeBlock:
+                throw new FaultException(MakingFindings.HeadOutOfPlace("recipes are written outside every block", sentence.Span));
+            case NoteSentence note:
+                if (followed is null)
+                    notes.Add(evaluator.Text(note.Text));
+                break;
+            case TradeSentence or SourceSentence or NeedsSentence or GivesSentence when followed is not null:
+                break;
+            case TradeSentence or SourceSentence or NeedsSentence or GivesSentence:
+                throw new FaultException(MakingFindings.HeadOutOfPlace("this sentence belongs in a recipe", sentence.Span));
+            case GivenSentence given:
+                Given(given, outermost);
+                break;
+            case LetSentence let:
+                Bind(let.Bound, evaluator.Evaluate(let.Value));
+                break;
+            case StageSentence stage:
+                stages.Open(evaluator.Text(stage.Text), bench.Acts.Count);
+                break;
+            case RefuseSentence refuse:
+                throw new FaultException(MakingFindings.Refused(evaluator.Text(refuse.Text), refuse.Span, followed?.Recipe));
+            case ForBlock loop:
+                Nested(loop.Span, () => Loop(loop));
+                break;
+            case WhenBlock choice:
+                Nested(choice.Span, () => When(choice));
+                break;
+            case FollowSentence follow:
+                Nested(follow.Span, () => Follow(follow));
+                break;
+            case ClaimSentence claim:
+                Claim(claim);
+                break;
+            case CompareSentence compare:
+                comparisons.Add(new ComparisonMaker(evaluator, decider).Compare(compare, followed?.Span, Add));
+                break;
+            case KeepSentence keep:
+                kept.AddRange(new Keeping(evaluator, decider).Keep(keep));
+                break;
+            case KeepRunSentence run:
+                kept.Add(new Keeping(evaluator, decider).Keep(run));
+                break;
+            case LetterSentence letter:
+                letterings.Add(new Keeping(evaluator, decider).Letter(letter));
+                break;
+            case WantSentence want:
+                bench.Begin(stages.ForAct(), followed?.Span ?? want.Span, null);
+                new WantMaker(evaluator, bench, constructions, (bound, value) => Bind(bound, value), BindMany).Make(want);
+                break;
+            default:
+                throw new UnreachableException($"Nothing is made of {sentence.GetType().Name}.");
+        }
+    }
+
+    private void Nested(SourceSpan span, Action inner)
+    {
+        if (++nesting > options.MaximumNesting)
+        {
+            nesting--;
+            throw new FaultException(MakingFindings.Limit("blocks and recipes are nested too deep", $"{options.MaximumNesting}", span));
+        }
+
+        try
+        {
+            inner();
+        }
+        finally
+        {
+            nesting--;
+        }
+    }
+
+    private void Given(GivenSentence given, bool outermost)
+    {
+        if (!outermost)
+            throw new FaultException(MakingFindings.BadGiven("a `given` stands outside every block", given.Span, "inside one, write `let`"));
+        string name = given.Name.Text;
+        givenNames.Add(name);
+        Value written = evaluator.Evaluate(given.Value);
+        Value value = written;
+        bool fromCaller = false;
+        if (options.Givens?.TryGetValue(name, out string? text) == true)
+        {
+            Outcome<Expression> read = ScriptReader.ReadExpression(text);
+            if (read.Value is null || read.HasErrors)
+                throw new FaultException(MakingFindings.BadGiven($"`{text}`, set for `{name}`, cannot be read", given.Span, read.Diagnostics.FirstOrDefault()?.Message));
+            value = evaluator.Evaluate(read.Value);
+            fromCaller = true;
+            if (value is QuantityValue { IsNothing: true } && written is AngleValue)
+                value = new AngleValue(Angle.Zero);
+            if (value.GetType() != written.GetType() || (value is QuantityValue q && q.Dimension != ((QuantityValue)written).Dimension && !q.IsNothing))
+                throw new FaultException(MakingFindings.BadGiven($"`{name}` is {written.KindWithArticle}, and `{text}` is {value.KindWithArticle}", given.Span, "give it in the same kind, with its unit"));
+        }
+
+        GivenRange bounds = BoundsOf(given, value);
+        value = bounds.Given(name, value);
+        Bind(new Bound(given.Name, [], given.Name.Span), value);
+        givens.Add(new(name, value is AngleValue ? QuantityKind.Angle : value is QuantityValue { Dimension: 1 } ? QuantityKind.Length : QuantityKind.Number, fromCaller ? options.Givens![name] : given.Value.ToString()!, fromCaller));
+    }
+
+    private GivenRange BoundsOf(GivenSentence given, Value value)
+    {
+        if (given.From is null || given.To is null)
+            return new(null, null);
+        Value from = evaluator.Evaluate(given.From), to = evaluator.Evaluate(given.To);
+        foreach ((Value bound, Expression at) in ((Value, Expression)[])[(from, given.From), (to, given.To)])
+            if (Evaluator.TraceOf(bound) is not null || (bound.GetType() != value.GetType() && bound is not QuantityValue { IsNothing: true }))
+                throw new FaultException(MakingFindings.BadGiven($"the range of `{given.Name.Text}` is in another kind", at.Span));
+        Rational low = Evaluator.Index(from, given.From).Value, high = Evaluator.Index(to, given.To).Value;
+        Rational at0 = Evaluator.Index(value, given.Value).Value;
+        if (at0 < low || at0 > high)
+            throw new FaultException(MakingFindings.BadGiven($"`{given.Name.Text}` lies outside its range, {given.From} to {given.To}", given.Span));
+        return new(low, high);
+    }
+
+    private void Loop(ForBlock loop)
+    {
+        Scope outer = evaluator.Scope;
+        foreach (RangeClause range in loop.Ranges)
+        {
+            Value first = evaluator.Evaluate(range.From);
+            IndexKey from = Evaluator.Index(first, range.From);
+            IndexKey to = range.To is null ? from : evaluator.Index(range.To);
+            Rational step = Rational.One;
+            if (range.Step is not null)
+            {
+                IndexKey by = evaluator.Index(range.Step);
+                step = by.Value;
+                if (step.Sign <= 0)
+                    throw new FaultException(MakingFindings.BadLoop("a loop's step is more than nothing", range.Step.Span, "loops run upward"));
+                if (by.Kind != from.Kind)
+                    throw new FaultException(MakingFindings.BadLoop("a loop's step is of the same kind as its ends", range.Step.Span));
+            }
+            else if (range.To is not null && from.Kind != QuantityKind.Number)
+            {
+                throw new FaultException(MakingFindings.BadLoop("a loop over lengths or angles needs a `step`", range.Span, "such as `step 10 mm` or `step 5°`"));
+            }
+
+            if (to.Kind != from.Kind && !to.Value.IsZero && !from.Value.IsZero)
+                throw new FaultException(MakingFindings.BadLoop("both ends of a loop are of one kind", range.Span));
+            QuantityKind kind = from.Value.IsZero ? to.Kind : from.Kind;
+            for (Rational at = from.Value; at <= to.Value; at += step)
+            {
+                Scope pass = outer.Pass();
+                if (outer.Find(loop.Variable.Text) is not (null or UnboundValue))
+                    throw new FaultException(MakingFindings.BoundTwice(loop.Variable.Text, loop.Variable.Span));
+                ConstantMeasure trace = new(at.ToDouble());
+                pass.Set(loop.Variable.Text, kind switch
+                {
+                    QuantityKind.Angle => new AngleValue(Angle.FromDegrees(at), trace),
+                    QuantityKind.Length => new QuantityValue(at, 1, trace),
+                    _ => new QuantityValue(at, 0, trace),
+                });
+                evaluator.Scope = pass;
+                try
+                {
+                    CarryOut(loop.Body);
+                }
+                finally
+                {
+                    evaluator.Scope = outer;
+                }
+            }
+        }
+    }
+
+    private void When(WhenBlock block)
+    {
+        int taken = block.Branches.Length;
+        for (int branch = 0; branch < block.Branches.Length && taken == block.Branches.Length; branch++)
+        {
+            if (block.Branches[branch].Condition is not { } condition)
+            {
+                taken = branch;
+                break;
+            }
+
+            (bool? holds, Verdict verdict) = new Conditions(evaluator, decider).Test(condition);
+            if (holds is null)
+                throw new FaultException(MakingFindings.Undecided($"whether `{condition}`", verdict, condition.Span));
+            if (holds.Value)
+                taken = branch;
+        }
+
+        if (taken < block.Branches.Length)
+            CarryOut(block.Branches[taken].Body);
+        LineMap lines = new(script.Text);
+        for (int branch = 0; branch < block.Branches.Length; branch++)
+            if (branch != taken)
+                foreach (Bound bound in block.Branches[branch].Body.SelectMany(Binding.Of))
+                    evaluator.Scope.Leave(bound, $"`{bound.Name.Text}` is bound only in the branch at line {lines.Find(bound.Span.Start).Line}, which was not taken");
+    }
+
+    private void Follow(FollowSentence follow)
+    {
+        string title = evaluator.Text(follow.Recipe);
+        if (recipes.Find(title) is not { } recipe)
+            throw new FaultException(MakingFindings.UnknownRecipe(title, NearName.Find(title, recipes.Titles), follow.Recipe.Span));
+        if (following.Contains(recipe.Title))
+            throw new FaultException(MakingFindings.FollowsItself(recipe.Title, follow.Recipe.Span));
+        Scope caller = evaluator.Scope;
+        Scope inner = new(null, evaluator.NameOf(follow.Alias) + ".");
+        BindNeeds(follow, recipe, inner);
+        (SourceSpan Span, string Recipe)? followedBefore = followed;
+        int stageBefore = stages.Current, parentBefore = stages.Parent, findingsBefore = findings.Count;
+        followed = (followedBefore?.Span ?? follow.Span, recipe.Title);
+        following.Add(recipe.Title);
+        stages.Parent = stages.ForAct();
+        isDial |= recipe.Trade == "dials";
+        evaluator.Scope = inner;
+        try
+        {
+            CarryOut(recipe.Body);
+            Dictionary<string, Value> gifts = new(StringComparer.Ordinal);
+            foreach (GiveClause gift in recipe.Gives)
+                gifts[gift.Name.Text] = inner.Find(gift.Name.Text) ?? new UnboundValue($"recipe \"{recipe.Title}\" did not make `{gift.Name.Text}` this time");
+            evaluator.Scope = caller;
+            Bind(follow.Alias, new GivenByRecipe(recipe.Title, gifts));
+        }
+        finally
+        {
+            evaluator.Scope = caller;
+            following.RemoveAt(following.Count - 1);
+            stages.Restore(stageBefore, parentBefore);
+            followed = followedBefore;
+        }
+
+        if (findings.Skip(findingsBefore).Any(finding => finding.Severity == Severity.Error && finding.Code is not ("RC2024" or "RC2026")))
+            Leave(follow, null);
+    }
+
+    private void BindNeeds(FollowSentence follow, Recipe recipe, Scope inner)
+    {
+        Dictionary<string, ArgumentClause> arguments = new(StringComparer.Ordinal);
+        foreach (ArgumentClause argument in follow.Arguments)
+        {
+            if (recipe.Needs.All(need => need.Name.Text != argument.Need.Text))
+            {
+                string? near = NearName.Find(argument.Need.Text, recipe.Needs.Select(need => need.Name.Text));
+                throw new FaultException(MakingFindings.BadNeed($"recipe \"{recipe.Title}\" has no need called `{argument.Need.Text}`", argument.Need.Span,
+                    near is null ? $"it needs {recipe.NeedsInWords}" : $"is `{near}` meant?"));
+            }
+
+            if (!arguments.TryAdd(argument.Need.Text, argument))
+                throw new FaultException(MakingFindings.BadNeed($"`{argument.Need.Text}` is given twice", argument.Span));
+        }
+
+        foreach (NeedClause need in recipe.Needs)
+        {
+            if (arguments.TryGetValue(need.Name.Text, out ArgumentClause? argument))
+            {
+                Value value = evaluator.Evaluate(argument.Value);
+                inner.Set(need.Name.Text, Kinds.Fit(value, need.Kind.Text)
+                    ?? throw new FaultException(MakingFindings.BadNeed($"`{need.Name.Text}` is {Kinds.WithArticle(need.Kind.Text)}, and `{argument.Value}` is {value.KindWithArticle}", argument.Value.Span)));
+            }
+            else if (need.Default is not null)
+            {
+                Scope caller = evaluator.Scope;
+                evaluator.Scope = inner;
+                try
+                {
+                    Value value = evaluator.Evaluate(need.Default);
+                    inner.Set(need.Name.Text, Kinds.Fit(value, need.Kind.Text) ?? value);
+                }
+                finally
+                {
+                    evaluator.Scope = caller;
+                }
+            }
+            else
+            {
+                throw new FaultException(MakingFindings.BadNeed($"recipe \"{recipe.Title}\" needs `{need.Name.Text}`, {Kinds.WithArticle(need.Kind.Text)}", follow.Span, $"add `with {need.Name.Text} = …`; it needs {recipe.NeedsInWords}"));
+            }
+        }
+    }
+
+    private void Claim(ClaimSentence claim)
+    {
+        Conditions conditions = new(evaluator, decider);
+        string says = conditions.Says(claim.Condition);
+        (bool? holds, Verdict verdict) = conditions.Test(claim.Condition);
+        string? by = holds == false ? conditions.ByHowMuch : null;
+        claims.Add(new(says, holds, verdict, by, followed?.Span ?? claim.Span, null));
+        if (holds == false)
+            Add(MakingFindings.ClaimRefuted(says, by, claim.Span));
+        else if (holds is null)
+            Add(MakingFindings.ClaimUndecided(says, verdict, claim.Span));
+    }
+
+    private void Bind(Bound bound, Value value)
+    {
+        string name = bound.Name.Text;
+        bool bindable = bound.Indices.IsEmpty
+            ? evaluator.Scope.TryBind(name, value)
+            : evaluator.Scope.TryBind(name, [.. bound.Indices.Select(evaluator.Index)], value);
+        if (!bindable)
+            throw new FaultException(MakingFindings.BoundTwice(evaluator.Labelled(new Reference([bound], bound.Span)).ToString()!, bound.Span));
+    }
+
+    private void BindMany(Many many, IReadOnlyList<(IndexKey Key, Value Value)> members)
+    {
+        foreach ((IndexKey key, Value value) in members)
+            if (!evaluator.Scope.TryBind(many.Name.Text, [key], value))
+                throw new FaultException(MakingFindings.BoundTwice($"{many.Name.Text}[{key}]", many.Span));
+    }
+
+    private void Leave(Sentence sentence, string? why)
+    {
+        foreach (Bound bound in Binding.Of(sentence))
+            evaluator.Scope.Leave(bound, why);
+    }
+
+    private void Add(Diagnostic? finding)
+    {
+        if (finding is null)
+            return;
+        Diagnostic placed = Placed(finding);
+        // A fault in a loop is told once, not once for each pass.
+        if (!findings.Any(told => told.Code == placed.Code && told.Span == placed.Span && (told.Code is not ("RC2024" or "RC2026") || told.Message == placed.Message)))
+            findings.Add(placed);
+    }
+
+    // A finding inside a recipe is told at the sentence that follows it, with the recipe's name.
+    private Diagnostic Placed(Diagnostic finding) => followed is not { } follow
+        ? finding
+        : finding with { Span = follow.Span, Message = finding.Code == "RC2023" ? finding.Message : $"in the recipe \"{follow.Recipe}\": {finding.Message}" };
+}

@@ -1,0 +1,180 @@
+using System.Diagnostics;
+using RuleAndCompass.Bench;
+using RuleAndCompass.Geometry;
+using RuleAndCompass.Language.Syntax;
+using RuleAndCompass.Numbers;
+
+namespace RuleAndCompass.Making.Wants;
+
+/// <summary>Makes each want: what its words mean, the acts for it, and the name it binds.</summary>
+internal sealed partial class WantMaker(Evaluator evaluator, Workbench bench, Constructions constructions, Action<Bound, Value> bind, Action<Many, IReadOnlyList<(IndexKey Key, Value Value)>> bindMany)
+{
+    private Decider Decider => bench.Decider;
+
+    public void Make(WantSentence want)
+    {
+        constructions.Serving = want.Span;
+        switch (want)
+        {
+            case PrickAt at:
+                Make(at);
+                break;
+            case PrickFoot foot:
+                Make(foot);
+                break;
+            case PrickCentre centre:
+                Make(centre);
+                break;
+            case PrickMidway midway:
+                Make(midway);
+                break;
+            case PrickAcross across:
+                Make(across);
+                break;
+            case PrickAbout about:
+                Make(about);
+                break;
+            case PrickWhere where:
+                Make(where);
+                break;
+            case PrickBoth both:
+                Make(both);
+                break;
+            case PrickOnToward on:
+                Make(on);
+                break;
+            case PrickOnAhead on:
+                Make(on);
+                break;
+            case PrickOnCircle on:
+                Make(on);
+                break;
+            case PrickTurned turned:
+                Make(turned);
+                break;
+            case PrickDividing dividing:
+                Make(dividing);
+                break;
+            case PrickRound round:
+                Make(round);
+                break;
+            case PrickSteppingAlong stepping:
+                Make(stepping);
+                break;
+            case PrickSteppingRound stepping:
+                Make(stepping);
+                break;
+            case RuleThrough through:
+                Make(through);
+                break;
+            case RuleToward toward:
+                Make(toward);
+                break;
+            case RuleSquare square:
+                Make(square);
+                break;
+            case RuleParallel parallel:
+                Make(parallel);
+                break;
+            case RuleBack back:
+                Make(back);
+                break;
+            case RuleTurned turned:
+                Make(turned);
+                break;
+            case RuleHalving halving:
+                Make(halving);
+                break;
+            case RuleHalvingAngle halving:
+                Make(halving);
+                break;
+            case RuleTouchingAt touching:
+                Make(touching);
+                break;
+            case RuleTouchingFrom touching:
+                Make(touching);
+                break;
+            case RuleTouchingBoth touching:
+                Make(touching);
+                break;
+            case StrikeThrough through:
+                Make(through);
+                break;
+            case StrikeOpening opening:
+                Make(opening);
+                break;
+            case StrikeTouching touching:
+                Make(touching);
+                break;
+            case StrikeThroughThree three:
+                Make(three);
+                break;
+            default:
+                throw new UnreachableException($"No want of {want.GetType().Name}.");
+        }
+    }
+
+    private void Bind(Bound bound, PointMark mark) => bind(bound, new PointValue(mark));
+
+    private void Bind(Bound bound, CircleMark mark) => bind(bound, new CircleValue(mark));
+
+    private void Bind(Bound bound, DirectedLine line, Point start) => bind(bound, new LineValue(line, start));
+
+    private static DirectedLine Directed(LineValue line) => line.Directed;
+
+    private static Curve CurveOf(CurveMark mark) => (Curve)mark.Figure;
+
+    private bool IsSame(PointValue a, PointValue b) => bench.Marks.IsSame(a.Point, b.Point);
+
+    private void Apart(PointValue a, Reference nameA, PointValue b, Reference nameB, Node at)
+    {
+        if (IsSame(a, b))
+            throw new FaultException(MakingFindings.OnePointTwice(nameA.ToString()!, nameB.ToString()!, at.Span));
+    }
+
+    private void On(PointValue point, Reference pointName, Curve curve, Reference curveName, Node at)
+    {
+        if (!Incidence.Holds(point.Point, curve, Decider))
+            throw new FaultException(MakingFindings.NotOn(pointName.ToString()!, curveName.ToString()!, Incidence.Distance(point.Point, curve), at.Span));
+    }
+
+    /// <summary>A direction as an angle from right; a point by the way to it.</summary>
+    private Angle AngleOf(Direction direction, PointValue from, Reference fromName)
+    {
+        switch (direction)
+        {
+            case SheetDirection sheet:
+                return Angle.FromDegrees(sheet.Degrees);
+            case TowardDirection toward:
+                Value value = evaluator.Evaluate(toward.Value);
+                if (value is AngleValue angle)
+                    return angle.Angle;
+                if (value is QuantityValue { IsNothing: true })
+                    return Angle.Zero;
+                if (value is PointValue point)
+                {
+                    if (IsSame(point, from))
+                        throw new FaultException(MakingFindings.OnePointTwice(toward.Value.ToString()!, fromName.ToString()!, direction.Span));
+                    Vector way = point.Point.From(from.Point);
+                    return Angle.OfVector(way.X, way.Y);
+                }
+
+                throw new FaultException(MakingFindings.WrongKind(toward.Value.ToString()!, value.KindWithArticle, "a direction", toward.Span, "`up`, `down`, `left`, `right`, a point or an angle"));
+            default:
+                throw new UnreachableException($"No way of {direction.GetType().Name}.");
+        }
+    }
+
+    /// <summary>Whether a direction runs ahead along a line that it lies on.</summary>
+    private bool IsAhead(LineValue line, Direction direction, PointValue from, Reference fromName)
+    {
+        (Real x, Real y) = AngleOf(direction, from, fromName).Vector;
+        Vector way = new(x, y);
+        int sign = Decider.Sign(Vector.Dot(line.Direction, way));
+        return sign != 0
+            ? sign > 0
+            : throw new FaultException(MakingFindings.Degenerate($"`{direction}` is square to the line, so it does not say which way along it", direction.Span, "name a point on the line, or the way it runs"));
+    }
+
+    private static Angle Signed(Angle angle, Way way) => way == Way.Clockwise ? -angle : angle;
+}
