@@ -58,7 +58,7 @@ public static class ScriptReader
         IResult<Expression> result = SentenceGrammar.LoneExpression(stream.Input(0));
         findings.AddRange(stream.Findings);
         if (!result.WasSuccessful && stream.Findings.Count == 0)
-            findings.Add(tokens.Count == 0 ? LanguageFindings.NothingWritten(new SourceSpan(0, text.Length)) : SentenceFault.Explain(stream, "", default));
+            findings.Add(SentenceFault.Explain(stream, "", new SourceSpan(0, text.Length)));
         return new Outcome<Expression>(findings.Count == 0 ? result.Value : null, InOrder(findings, limits));
     }
 
@@ -79,19 +79,17 @@ public static class ScriptReader
         if (tokens.FindIndex(start, end - start, token => token.Kind == TokenKind.Fault) >= 0)
         {
             // a comma at the end of a faulty line must not take the next sentence with it
-            int next = tokens.FindIndex(start + 1, end - start - 1, token => token.FirstOnLine && Vocabulary.IsSentenceWord(token.Text));
+            int next = tokens.FindIndex(start + 1, end - start - 1, token => token.FirstOnLine && SentenceForms.Begins(token.Text));
             end = next < 0 ? end : next;
-            if (first.Kind == TokenKind.Word && !Vocabulary.IsSentenceWord(first.Text) && tokens.FindIndex(start, end - start, token => token.Kind == TokenKind.Fault) < 0)
-                findings.Add(LanguageFindings.UnknownSentenceWord(first.Text, first.Span));
-            blocks.AddBad(Meant(first), first, UnreadName.Find(tokens, start, end));
+            blocks.AddBad(Meant(first), first, UnreadName.Find(tokens, start, end, Meant(first)));
             return end;
         }
 
-        if (first.Kind != TokenKind.Word || !Vocabulary.IsSentenceWord(first.Text))
+        if (first.Kind != TokenKind.Word || !SentenceForms.Begins(first.Text))
         {
             string written = text.Substring(first.Span.Start, first.Span.Length);
-            findings.Add(first.Kind == TokenKind.Word ? LanguageFindings.UnknownSentenceWord(first.Text, first.Span) : LanguageFindings.NoSentenceWord(written, first.Span));
-            blocks.AddBad(Meant(first), first, UnreadName.Find(tokens, start, end));
+            findings.Add(LanguageFindings.UnknownSentenceWord(written, tokens.GetRange(start, end - start).Select(token => token.Text), first.Span));
+            blocks.AddBad(Meant(first), first, UnreadName.Find(tokens, start, end, Meant(first)));
             return end;
         }
 
@@ -104,7 +102,7 @@ public static class ScriptReader
             if (stream.Findings.Count == 0 && stream.Doubts.Count == 0)
                 blocks.Add(result.Value, first);
             else
-                blocks.AddBad(first.Text, first, UnreadName.Find(tokens, start, end));
+                blocks.AddBad(first.Text, first, UnreadName.Find(tokens, start, end, first.Text));
             return end;
         }
 
@@ -115,19 +113,19 @@ public static class ScriptReader
             if (!stream.Findings.Any(other => other.Span == finding.Span))
                 findings.Add(finding);
             Token found = stream[stream.Farthest];
-            if (stream.Farthest > 0 && found.FirstOnLine && Vocabulary.IsSentenceWord(found.Text))
+            if (stream.Farthest > 0 && found.FirstOnLine && SentenceForms.Begins(found.Text))
                 end = start + stream.Farthest;
         }
 
-        blocks.AddBad(first.Text, first, UnreadName.Find(tokens, start, end));
+        blocks.AddBad(first.Text, first, UnreadName.Find(tokens, start, end, first.Text));
         return end;
     }
 
     // The sentence word that was meant, so that a mistyped `for` still takes its `end`.
     private static string Meant(Token first) =>
         first.Kind != TokenKind.Word ? ""
-        : Vocabulary.IsSentenceWord(first.Text) ? first.Text
-        : NearName.Find(first.Text, Vocabulary.Sentences.Select(entry => entry.Word)) ?? "";
+        : SentenceForms.Begins(first.Text) ? first.Text
+        : NearName.Find(first.Text, SentenceForms.Words) ?? "";
 
     private static ImmutableArray<Diagnostic> InOrder(List<Diagnostic> findings, ReadingLimits limits)
     {

@@ -16,6 +16,7 @@ internal static class SentenceFault
         Token found = stream[at];
         Token before = at > 0 ? stream[at - 1] : found;
         ImmutableArray<string> expected = [.. stream.Expected.Where(what => what != Rules.TheEnd)];
+        string? example = SentenceForms.FindNearest(sentenceWord, Words(stream));
         bool mayEnd = stream.Expected.Contains(Rules.TheEnd);
 
         if (found.Kind == TokenKind.Sign && found.Text is ")" or "]" && OpenBracket(stream, at) is null)
@@ -23,8 +24,8 @@ internal static class SentenceFault
         if (OpenBracket(stream, at) is { } open && !Closes(stream, at, open))
             return LanguageFindings.BracketNotClosed(open.Text, open.Span);
         if (found.Kind == TokenKind.End)
-            return at == 0 ? LanguageFindings.BreaksOff("{", expected, sentenceWord, emptySpan) : LanguageFindings.BreaksOff(Written(stream, before), expected, sentenceWord, before.Span);
-        if (found.FirstOnLine && before.IsSign(",") && Vocabulary.IsSentenceWord(found.Text) && !Looks(expected, found))
+            return LanguageFindings.BreaksOff(at == 0 ? null : Written(stream, before), expected, example, at == 0 ? emptySpan : before.Span);
+        if (found.FirstOnLine && before.IsSign(",") && SentenceForms.Begins(found.Text) && !Looks(expected, found))
             return LanguageFindings.CommaBeforeSentence(found.Text, before.Span);
 
         if (found.Kind == TokenKind.Word)
@@ -39,13 +40,22 @@ internal static class SentenceFault
                 return LanguageFindings.UnitAfterValue(found.Text, found.Span);
             return mayEnd
                 ? LanguageFindings.TooManyWords(found.Text, near, expected, found.Span)
-                : LanguageFindings.Unexpected(found.Text, expected, near, sentenceWord, found.Span);
+                : LanguageFindings.Unexpected(found.Text, expected, near, example, found.Span);
         }
 
         string written = Written(stream, found);
         return mayEnd
             ? LanguageFindings.TooManyWords(written, null, expected, found.Span)
-            : LanguageFindings.Unexpected(written, expected, null, sentenceWord, found.Span);
+            : LanguageFindings.Unexpected(written, expected, null, example, found.Span);
+    }
+
+    private static IEnumerable<string> Words(TokenStream stream)
+    {
+        for (int i = 1; i < stream.Count; i++)
+        {
+            if (stream[i].Kind == TokenKind.Word)
+                yield return stream[i].Text;
+        }
     }
 
     private static string Written(TokenStream stream, Token token) => stream.Text.Substring(token.Span.Start, token.Span.Length);

@@ -4,20 +4,17 @@ namespace RuleAndCompass.Language.Grammar;
 internal static class UnreadName
 {
     /// <summary>The names among the tokens from <paramref name="start"/> to <paramref name="end"/>, or the title of a recipe.</summary>
-    public static IEnumerable<string> Find(List<Token> tokens, int start, int end)
+    /// <param name="meant">The word the sentence was meant to begin with; empty where that can't be guessed, and then it may have bound the name after it.</param>
+    public static IEnumerable<string> Find(List<Token> tokens, int start, int end, string meant) => meant switch
     {
-        string word = tokens[start].Text;
-        if (word == "recipe")
-            return Texts(tokens, start, end);
-        if (word is "follow")
-            return Names(tokens, Math.Max(tokens.FindIndex(start, end - start, token => token.IsWord("as")), start) + 1, end, lists: false);
-        if (word is "needs" or "gives")
-            return Names(tokens, start + 1, end, lists: true);
-        // a mistyped first word binds what follows it, most likely
-        return Names(tokens, start + 1, end, lists: word is not ("given" or "let" or "for"));
-    }
+        "prick" or "rule" or "strike" or "needs" => Names(tokens, start + 1, end, isList: true),
+        "given" or "let" or "for" or "" => Names(tokens, start + 1, end, isList: false),
+        "follow" => Names(tokens, Math.Max(tokens.FindIndex(start, end - start, token => token.IsWord("as")), start) + 1, end, isList: false),
+        "recipe" => Texts(tokens, start, end),
+        _ => [],
+    };
 
-    private static IEnumerable<string> Names(List<Token> tokens, int at, int end, bool lists)
+    private static IEnumerable<string> Names(List<Token> tokens, int at, int end, bool isList)
     {
         int depth = 0;
         bool takes = true;
@@ -28,10 +25,12 @@ internal static class UnreadName
                 depth++;
             else if (token.IsSign("]") || token.IsSign(")"))
                 depth--;
+            else if (token.Kind == TokenKind.Word && Vocabulary.LittleWords.Contains(token.Text))
+                yield break;
             else if (token.Kind == TokenKind.Word && takes && depth <= 0)
                 yield return token.Text;
             if (depth <= 0)
-                takes = lists && token.IsSign(",");
+                takes = isList && token.IsSign(",");
         }
     }
 
