@@ -1,21 +1,17 @@
 using System.Text;
 using System.Text.Json;
 using System.Text.RegularExpressions;
+using RuleAndCompass.Plates.Writing;
 
 namespace RuleAndCompass.CommandLine.Files;
 
 /// <summary>
-/// How an output tells which script it came from. Each holds the words <c>made by setout from NAME</c>, the name written as in a web address (letters, digits
-/// and <c>- . _ ~</c>; all else as % and two hexadecimal figures), so that the words are the same bytes in every format; a JSON result says it under
-/// <c>script</c>.
+/// How an output tells which script it came from: each holds the one line of <see cref="Origin"/>, the same bytes in every format, but for a JSON result, which
+/// says it under <c>script</c>.
 /// </summary>
 internal static partial class OutputMark
 {
-    private const string Words = "made by setout from ";
-    private const int BytesLookedAt = 1 << 18; // The words stand in the head of a text and in the head or the tail of a PDF.
-
-    /// <summary>The words for a script.</summary>
-    public static string Of(string script) => Words + Uri.EscapeDataString(script);
+    private const int BytesLookedAt = 1 << 18; // The line stands in the head of a text and in the head or the tail of a PDF.
 
     /// <summary>The script that an existing file came from, or null where it does not tell.</summary>
     public static string? Find(string path)
@@ -31,8 +27,7 @@ internal static partial class OutputMark
         return Find(block.AsSpan(0, file.ReadAtLeast(block, block.Length, throwOnEndOfStream: false)));
     }
 
-    /// <summary>The script that these bytes name, or null.</summary>
-    public static string? Find(ReadOnlySpan<byte> bytes)
+    private static string? Find(ReadOnlySpan<byte> bytes)
     {
         Match match = Pattern.Match(Encoding.Latin1.GetString(bytes));
         return match.Success ? Uri.UnescapeDataString(match.Groups[1].Value) : null;
@@ -44,7 +39,7 @@ internal static partial class OutputMark
         {
             using JsonDocument document = JsonDocument.Parse(file);
             return document.RootElement is { ValueKind: JsonValueKind.Object } root
-                && root.TryGetProperty("format", out JsonElement format) && format.ValueKind == JsonValueKind.String && format.GetString() == "setout/1"
+                && root.TryGetProperty("format", out JsonElement format) && format.ValueKind == JsonValueKind.String && format.GetString() == Json.ResultJson.Format
                 && root.TryGetProperty("script", out JsonElement script) && script.ValueKind == JsonValueKind.String
                 ? script.GetString()
                 : null;
@@ -55,6 +50,6 @@ internal static partial class OutputMark
         }
     }
 
-    [GeneratedRegex("made by setout from ([A-Za-z0-9._~%-]+)", RegexOptions.CultureInvariant)]
+    [GeneratedRegex("Set out from ([A-Za-z0-9._/%]+) by Rule and Compass", RegexOptions.CultureInvariant)]
     private static partial Regex Pattern { get; }
 }
