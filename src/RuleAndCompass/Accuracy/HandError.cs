@@ -72,10 +72,11 @@ public static class HandError
     /// <summary>The ends of what is kept of marks: how far their lines are needed.</summary>
     internal static IEnumerable<KeptEnd> KeptEnds(Layout layout) =>
         from kept in layout.Kept
-        where kept.Mark is not null
+        let mark = kept.Mark
+        where mark is not null
         from piece in kept.Pieces.OfType<SegmentPiece>()
         from end in new[] { piece.From, piece.To }
-        select new KeptEnd(kept.Mark, end);
+        select new KeptEnd(mark, end);
 
     private static void RunTrials(
         ActProgram program, Figures[] figures, HandErrorOptions options, List<Diagnostic> findings, IProgress<double>? progress, CancellationToken cancellation)

@@ -357,6 +357,13 @@ internal sealed class Evaluator(Decider decider)
             case "remainder":
             {
                 Count(call, 2);
+                if (Evaluate(call.Arguments[0]) is AngleValue turned)
+                {
+                    AngleValue part = AngleValueOf(call.Arguments[1]);
+                    NotZero(part.Angle.Degrees, call.Arguments[1].Span);
+                    return new AngleValue(turned.Angle - (Floor(turned.Angle.Degrees / part.Angle.Degrees, call.Span) * part.Angle), turned.Trace);
+                }
+
                 (QuantityValue of, QuantityValue by) = OneKind(call, 0, 1);
                 NotZero(by.Amount, call.Arguments[1].Span);
                 Rational times = Floor(of.Amount / by.Amount, call.Span);

@@ -1,87 +1,342 @@
-using System.Collections.Immutable;
+using System.Globalization;
+using System.Numerics;
 
 namespace RuleAndCompass.Numbers;
-
-/// <summary>How a decision was reached; the words of a report.</summary>
-public enum Certainty
-{
-    /// <summary>A non-zero sign from an enclosure, or an exact zero.</summary>
-    Proved,
-
-    /// <summary>Proved with the givens as unknowns.</summary>
-    ProvedForEvery,
-
-    /// <summary>By modular images; the chance of error is at most 2^−<see cref="Verdict.Size"/>.</summary>
-    Certain,
-
-    /// <summary>By random values of the givens; the chance of error is at most 2^−<see cref="Verdict.Size"/>.</summary>
-    CertainForEvery,
-
-    /// <summary>Not decided: equal to <see cref="Verdict.Size"/> decimal digits.</summary>
-    Digits,
-}
-
-/// <summary>What is known of a decision.</summary>
-/// <param name="Certainty">Which of the five words.</param>
-/// <param name="Size">Bits for the certain ones, decimal digits for <see cref="Certainty.Digits"/>, else 0.</param>
-/// <param name="Givens">For the <c>…ForEvery</c> ones: the names of the givens, each with its range in words where the range is not the whole line (<c>latitude from 1° to 89°</c>).</param>
-public sealed record Verdict(Certainty Certainty, int Size, ImmutableArray<string> Givens)
-{
-    public static Verdict Proved { get; } = new(Certainty.Proved, 0, []);
-    public bool IsDecided => Certainty != Certainty.Digits;
-    /// <summary><c>proved</c>, <c>proved for every latitude</c>, <c>certain (2^-128)</c>, <c>certain for every latitude (2^-128)</c>, <c>to 50 digits</c>.</summary>
-    public override string ToString() => throw new NotImplementedException();
-}
-
-/// <summary>The sign of a number, and how it is known. An undecided sign is 0 with <see cref="Certainty.Digits"/>.</summary>
-public readonly record struct Decision(int Sign, Verdict Verdict)
-{
-    public bool IsZero => Sign == 0 && Verdict.IsDecided;
-}
-
-/// <summary>A decision was too hard for the limits, or cannot be decided at all; says what is known so far.</summary>
-public sealed class UndecidedException(string message, Verdict known) : Exception(message)
-{
-    public Verdict Known { get; } = known;
-}
-
-/// <summary>What bounds the work of decisions.</summary>
-/// <param name="Seed">SHA-256 of the script's text: the random primes and points follow from it.</param>
-/// <param name="Prove">Do the exact computation however long it takes.</param>
-/// <param name="MaximumBits">Largest precision of an enclosure.</param>
-/// <param name="MaximumDegree">Largest degree of a tower decided exactly without <paramref name="Prove"/>.</param>
-/// <param name="TimeLimit">For one decision.</param>
-public sealed record DeciderOptions(
-    ReadOnlyMemory<byte> Seed = default,
-    bool Prove = false,
-    int MaximumBits = 65536,
-    int MaximumDegree = 64,
-    TimeSpan? TimeLimit = null);
 
 /// <summary>Decides signs exactly. One for a script; not for use by several threads at once.</summary>
 public sealed class Decider
 {
-    public Decider(DeciderOptions options, CancellationToken cancellation = default) => throw new NotImplementedException();
+    private const int FirstBits = 128;
+    private const int SuspectZero = -56;
+    private const int MostBitsUnresolved = 4096;
+    private const int MostBitsUndecided = 2048;
+
+    private readonly DeciderOptions options;
+    private readonly CancellationToken cancellation;
+    private readonly SeededBits random;
+
+    /// <summary>Decides within the limits of <paramref name="options"/>.</summary>
+    public Decider(DeciderOptions options, CancellationToken cancellation = default)
+    {
+        this.options = options;
+        this.cancellation = cancellation;
+        random = new SeededBits(options.Seed);
+    }
+
+    private int MaximumDegree => options.Prove ? int.MaxValue : Math.Max(options.MaximumDegree, 64);
+
     /// <summary>The sign of <paramref name="x"/>, with how it is known; may be undecided for quantities without exact value.</summary>
-    public Decision Decide(Real x) => throw new NotImplementedException();
+    /// <exception cref="UndecidedException">The limits were reached.</exception>
+    public Decision Decide(Real x)
+    {
+        if (SignOfEnclosure(x) is { } quick)
+            return new Decision(quick, Verdict.Proved);
+
+        int bits = FirstBits;
+        for (; bits <= MostBitsUnresolved; bits *= 2)
+        {
+            Ball ball = Enclosures.Of(x, bits, cancellation);
+            if (ball.Sign != 0)
+                return new Decision(ball.Sign, Verdict.Proved);
+            if (ball.IsBelow(SuspectZero))
+                break;
+        }
+
+        bool? isZero = DecideZero(x, out Verdict? verdict);
+        if (isZero == true)
+            return new Decision(0, verdict!);
+
+        // Not zero, or nobody knows: ever finer balls.
+        int most = isZero == false ? options.MaximumBits : Math.Min(options.MaximumBits, MostBitsUndecided);
+        for (; bits <= most; bits *= 2)
+        {
+            Ball ball = Enclosures.Of(x, bits, cancellation);
+            if (ball.Sign != 0)
+                return new Decision(ball.Sign, Verdict.Proved);
+        }
+
+        Verdict known = new(Certainty.Digits, DigitsBelow(Enclosures.Of(x, most, cancellation)), []);
+        if (isZero == false)
+            throw new UndecidedException($"the number is not 0 but closer to it than {most.ToString(CultureInfo.InvariantCulture)} bits can tell", known);
+        return new Decision(0, known);
+    }
+
     /// <summary>The sign of <paramref name="x"/>.</summary>
     /// <exception cref="UndecidedException">It could not be decided.</exception>
-    public int Sign(Real x) => throw new NotImplementedException();
-    public bool IsZero(Real x) => throw new NotImplementedException();
-    public int Compare(Real a, Real b) => throw new NotImplementedException();
+    public int Sign(Real x)
+    {
+        if (SignOfEnclosure(x) is { } quick)
+            return quick;
+
+        Decision decision = Decide(x);
+        if (!decision.Verdict.IsDecided)
+            throw new UndecidedException($"the two sides agree {decision.Verdict} and have no exact value to compare", decision.Verdict);
+        return decision.Sign;
+    }
+
+    /// <summary>Whether <paramref name="x"/> is 0.</summary>
+    /// <exception cref="UndecidedException">It could not be decided.</exception>
+    public bool IsZero(Real x) => Sign(x) == 0;
+
+    /// <summary>The sign of a − b.</summary>
+    /// <exception cref="UndecidedException">It could not be decided.</exception>
+    public int Compare(Real a, Real b)
+    {
+        if (a.Low > b.High)
+            return 1;
+        return a.High < b.Low ? -1 : Sign(a - b);
+    }
+
     /// <summary>Compares sizes of angles (turns counted): the sign of a − b.</summary>
-    public Decision Compare(Angle a, Angle b) => throw new NotImplementedException();
+    public Decision Compare(Angle a, Angle b)
+    {
+        Angle difference = a - b;
+        if (difference.TryGetDegrees(out Rational degrees))
+            return new Decision(degrees.Sign, Verdict.Proved);
+
+        Real size = difference.Degrees;
+        for (int bits = FirstBits; bits <= MostBitsUndecided; bits *= 2)
+        {
+            Ball ball = Enclosures.Of(size, bits, cancellation);
+            if (ball.Sign != 0)
+                return new Decision(ball.Sign, Verdict.Proved);
+
+            // Within a turn, the angle is 0 exactly when its direction is: a multiple that has a direction will do.
+            Angle whole = difference.WithDirection(out BigInteger multiple);
+            if (bits == FirstBits && ball.IsBelow(-(int)multiple.GetBitLength()))
+            {
+                Decision direction = CompareDirections(whole, Angle.Zero);
+                if (direction.Sign == 0 && direction.Verdict.IsDecided)
+                    return direction;
+            }
+        }
+
+        return new Decision(0, new Verdict(Certainty.Digits, DigitsBelow(Enclosures.Of(size, MostBitsUndecided, cancellation)), []));
+    }
+
     /// <summary>Whether a and b point the same way (turns not counted): sign 0 when they do, else the sign of the turn from b to a the short way.</summary>
-    public Decision CompareDirections(Angle a, Angle b) => throw new NotImplementedException();
+    public Decision CompareDirections(Angle a, Angle b)
+    {
+        Angle difference = a - b;
+        if (difference.TryGetDegrees(out Rational degrees))
+        {
+            Rational turn = Constructible.Turned(degrees, 360);
+            return new Decision(turn.IsZero ? 0 : turn <= 180 ? 1 : -1, Verdict.Proved);
+        }
+
+        (Real ax, Real ay) = a.Vector;
+        (Real bx, Real by) = b.Vector;
+        Decision side = Decide(bx * ay - by * ax);
+        if (side.Sign != 0 || !side.Verdict.IsDecided)
+            return side;
+        return Sign(ax * bx + ay * by) > 0 ? side : new Decision(1, side.Verdict);
+    }
+
     /// <summary>
     /// True when <paramref name="x"/> vanishes for every value of the nodes in <paramref name="free"/> near the ones they have,
     /// treating those nodes as independent unknowns: a local theorem, cheap however deep the nodes are. False says nothing.
     /// </summary>
-    public bool HoldsIdentically(Real x, IReadOnlyCollection<Real> free, out Verdict verdict) => throw new NotImplementedException();
+    public bool HoldsIdentically(Real x, IReadOnlyCollection<Real> free, out Verdict verdict)
+    {
+        verdict = new Verdict(Certainty.Digits, 0, []);
+        if (SignOfEnclosure(x) is { } quick)
+        {
+            if (quick == 0)
+                verdict = Verdict.Proved;
+            return quick == 0;
+        }
+
+        // A stand-in for each free node is made by rebuilding the graph above them.
+        Real rebuilt = FreeNodes.Detach(x, free);
+        List<Real> leaves = StraightLine.LeavesOf(rebuilt);
+        Verdict? found = leaves.Count == 0 ? null : new GenericPoint(leaves, random, cancellation).TryVanishing(rebuilt, MaximumDegree);
+        if (found is null)
+            return false;
+
+        verdict = found;
+        return true;
+    }
+
     /// <summary>A decimal with <paramref name="significantDigits"/> certain digits (the last one rounded), fewer where the decimal ends. Plain notation.</summary>
-    public string ToDecimal(Real x, int significantDigits) => throw new NotImplementedException();
+    public string ToDecimal(Real x, int significantDigits)
+    {
+        if (SignOfEnclosure(x) is not { } sign)
+        {
+            Decision decision = Decide(x);
+            sign = decision.Sign;
+        }
+
+        if (sign == 0)
+            return "0";
+
+        // The place of the first digit, from an enclosure of the size; the rounding itself is certain.
+        for (int bits = FirstBits; ; bits *= 2)
+        {
+            Ball ball = Enclosures.Of(x, bits, cancellation);
+            if (ball.Sign == 0)
+            {
+                if (bits > options.MaximumBits)
+                    throw TooFine(bits);
+                continue;
+            }
+
+            // 10^(magnitude) ≤ |x| up to one too many, which the rounding below puts right.
+            int magnitude = (int)Math.Floor((BigInteger.Log10(BigInteger.Abs(ball.Middle)) + ball.Exponent * 0.30102999566398120));
+            string text = DecimalText.Write(RoundedAt(x, significantDigits - 1 - magnitude), significantDigits - 1 - magnitude, trim: true);
+            return text;
+        }
+    }
+
     /// <summary>A decimal rounded to <paramref name="places"/> decimals, certain.</summary>
-    public string ToFixed(Real x, int places) => throw new NotImplementedException();
+    public string ToFixed(Real x, int places)
+    {
+        BigInteger rounded = RoundedAt(x, places);
+        return DecimalText.Write(rounded, places, trim: false);
+    }
+
     /// <summary>The exact form where it is short (<c>3/8</c>, <c>√2/2</c>), else null.</summary>
-    public string? ToExactForm(Real x) => throw new NotImplementedException();
+    public string? ToExactForm(Real x)
+    {
+        if (x.TryGetRational(out Rational rational))
+            return ExactForm.Of(FieldElement.Of(rational), null);
+
+        StraightLine? line = StraightLine.Compile(x, Specific);
+        if (line is null)
+            return null;
+
+        try
+        {
+            var tower = new Tower(ExactForm.MostDegree, cancellation);
+            FieldElement element = ExactEvaluation.Run(line, tower, cancellation, out _);
+            return ExactForm.Of(element, tower);
+        }
+        catch (Exception failure) when (failure is NegativeRadicandException or TowerTooHighException or DivideByZeroException)
+        {
+            return null;
+        }
+    }
+
+    // The sign, or 0 for the rational 0, where the enclosure at hand tells it.
+    private static int? SignOfEnclosure(Real x)
+    {
+        if (x.Low > 0)
+            return 1;
+        if (x.High < 0)
+            return -1;
+        return x is RationalReal rational ? rational.Value.Sign : null;
+    }
+
+    private static int DigitsBelow(Ball ball)
+    {
+        int magnitude = ball.IsUnknown ? 0 : ball.MagnitudeBound();
+        return magnitude >= 0 ? 0 : (int)(-(long)magnitude * 30103 / 100000);
+    }
+
+    private bool? DecideZero(Real x, out Verdict? verdict)
+    {
+        verdict = null;
+        List<Real> leaves = StraightLine.LeavesOf(x);
+        if (leaves.Count > 0)
+        {
+            verdict = new GenericPoint(leaves, random, cancellation).TryVanishing(x, MaximumDegree);
+            if (verdict is not null)
+                return true;
+        }
+
+        StraightLine? line = StraightLine.Compile(x, Specific);
+        if (line is null)
+            return null;
+
+        try
+        {
+            var tower = new Tower(MaximumDegree, cancellation);
+            FieldElement value = ExactEvaluation.Run(line, tower, cancellation, out _);
+            verdict = Verdict.Proved;
+            return value.IsZero;
+        }
+        catch (TowerTooHighException tooHigh)
+        {
+            throw new UndecidedException(
+                $"the decision needs numbers of degree {tooHigh.Degree.ToString(CultureInfo.InvariantCulture)}",
+                new Verdict(Certainty.Digits, DigitsBelow(Enclosures.Of(x, FirstBits, cancellation)), []));
+        }
+        catch (DivideByZeroException)
+        {
+            throw new UndecidedException("a divisor is exactly 0", new Verdict(Certainty.Digits, 0, []));
+        }
+        catch (NegativeRadicandException)
+        {
+            throw new UndecidedException("a radicand is negative", new Verdict(Certainty.Digits, 0, []));
+        }
+    }
+
+    // A leaf by its own value where that is constructible.
+    private static Real? Specific(Real leaf)
+    {
+        if (leaf is GivenReal given)
+            return given.Value;
+        if (leaf is not DirectionReal direction || !direction.Source.Degrees.TryGetRational(out Rational degrees))
+            return null;
+
+        (Rational part, Rational rest) = Constructible.Split(direction.Multiple * degrees);
+        if (!rest.IsZero)
+            return null;
+        (Real cosine, Real sine) = Constructible.Unit(part);
+        return direction.IsSine ? sine : cosine;
+    }
+
+    // x × 10^places rounded to the nearest integer, ties away from zero: floor(2·|x|·10^places) tells, and only a tie needs a decision.
+    private BigInteger RoundedAt(Real x, int places)
+    {
+        Rational scale = places >= 0 ? BigInteger.Pow(10, places) : Rational.One / BigInteger.Pow(10, -places);
+        Rational half = new(1, 2);
+        if (x.TryGetRational(out Rational exact))
+        {
+            Rational scaled = exact.Abs() * scale;
+            return (scaled + half).Floor() * (exact.Sign < 0 ? -1 : 1);
+        }
+
+        bool decided = false;
+        for (int bits = FirstBits; bits <= options.MaximumBits; bits *= 2)
+        {
+            Ball ball = Enclosures.Of(x, bits, cancellation);
+            if (ball.IsUnknown)
+                continue;
+
+            Rational low = ball.End(upper: false) * scale;
+            Rational high = ball.End(upper: true) * scale;
+            BigInteger first = RoundAway(low);
+            BigInteger last = RoundAway(high);
+            if (first == last)
+                return first;
+
+            if (!decided && last - first <= 1)
+            {
+                // The one tie, or the sign, that may lie between.
+                decided = true;
+                Rational tie = (first + last) * half / scale;
+                Decision decision = Decide(x - tie);
+                if (decision.Verdict.IsDecided)
+                {
+                    if (decision.Sign != 0)
+                        return decision.Sign > 0 ? last : first;
+                    return tie.Sign < 0 ? first : last;
+                }
+
+                // Equal to the tie as far as anyone can tell: either way of rounding is right within that.
+                return tie.Sign < 0 ? first : last;
+            }
+        }
+
+        throw TooFine(options.MaximumBits);
+    }
+
+    private static BigInteger RoundAway(Rational value)
+    {
+        BigInteger size = (value.Abs() + new Rational(1, 2)).Floor();
+        return value.Sign < 0 ? -size : size;
+    }
+
+    private static UndecidedException TooFine(int bits) =>
+        new($"the digits need more than {bits.ToString(CultureInfo.InvariantCulture)} bits", new Verdict(Certainty.Digits, 0, []));
 }

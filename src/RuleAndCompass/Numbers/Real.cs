@@ -1,26 +1,160 @@
 namespace RuleAndCompass.Numbers;
 
 /// <summary>An exact real number: an immutable node of an expression graph.</summary>
+/// <remarks>
+/// A node knows an enclosure in doubles from its making on; <see cref="Decider"/> tightens it. The value never changes, only what is
+/// known of it, and each bound is right by itself, so that reading while another thread writes is harmless.
+/// </remarks>
 public abstract class Real
 {
-    public static Real Zero => throw new NotImplementedException();
-    public static Real One => throw new NotImplementedException();
+    private protected Real(Interval enclosure)
+    {
+        Low = enclosure.Low;
+        High = enclosure.High;
+    }
+
+    /// <summary>0.</summary>
+    public static Real Zero { get; } = new RationalReal(Rational.Zero);
+
+    /// <summary>1.</summary>
+    public static Real One { get; } = new RationalReal(Rational.One);
+
     /// <summary>π, a quantity without an exact value: enclosures only, generic in identities.</summary>
-    public static Real Pi => throw new NotImplementedException();
-    public static implicit operator Real(int value) => throw new NotImplementedException();
-    public static implicit operator Real(Rational value) => throw new NotImplementedException();
-    public static Real operator +(Real a, Real b) => throw new NotImplementedException();
-    public static Real operator -(Real a, Real b) => throw new NotImplementedException();
-    public static Real operator *(Real a, Real b) => throw new NotImplementedException();
-    /// <summary>The caller has decided that <paramref name="b"/> is not zero.</summary>
-    public static Real operator /(Real a, Real b) => throw new NotImplementedException();
-    public static Real operator -(Real a) => throw new NotImplementedException();
-    /// <summary>The caller has decided that <paramref name="radicand"/> is not negative.</summary>
-    public static Real Sqrt(Real radicand) => throw new NotImplementedException();
+    public static Real Pi { get; } = new PiReal();
+
+    /// <summary>Not above the value.</summary>
+    internal double Low { get; private set; }
+
+    /// <summary>Not below the value.</summary>
+    internal double High { get; private set; }
+
+    /// <summary>An integer.</summary>
+    public static implicit operator Real(int value) => new RationalReal(value);
+
+    /// <summary>A fraction.</summary>
+    public static implicit operator Real(Rational value) => new RationalReal(value);
+
+    /// <summary>The sum.</summary>
+    public static Real operator +(Real a, Real b)
+    {
+        if (a is RationalReal p)
+        {
+            if (b is RationalReal q)
+                return new RationalReal(p.Value + q.Value);
+            if (p.Value.IsZero)
+                return b;
+        }
+        else if (b is RationalReal { Value.IsZero: true })
+        {
+            return a;
+        }
+
+        return new OperationReal(Operation.Add, a, b, Interval.Add(a, b));
+    }
+
+    /// <summary>The difference.</summary>
+    public static Real operator -(Real a, Real b)
+    {
+        if (b is RationalReal q)
+        {
+            if (a is RationalReal p)
+                return new RationalReal(p.Value - q.Value);
+            if (q.Value.IsZero)
+                return a;
+        }
+
+        return ReferenceEquals(a, b) ? Zero : new OperationReal(Operation.Subtract, a, b, Interval.Subtract(a, b));
+    }
+
+    /// <summary>The product.</summary>
+    public static Real operator *(Real a, Real b)
+    {
+        if (a is RationalReal p)
+        {
+            if (b is RationalReal q)
+                return new RationalReal(p.Value * q.Value);
+            if (p.Value.IsZero)
+                return a;
+            if (p.Value == Rational.One)
+                return b;
+        }
+        else if (b is RationalReal q)
+        {
+            if (q.Value.IsZero)
+                return b;
+            if (q.Value == Rational.One)
+                return a;
+        }
+
+        return new OperationReal(Operation.Multiply, a, b, Interval.Multiply(a, b));
+    }
+
+    /// <summary>The quotient. The caller has decided that <paramref name="b"/> is not zero.</summary>
+    /// <exception cref="DivideByZeroException"><paramref name="b"/> is the rational 0.</exception>
+    public static Real operator /(Real a, Real b)
+    {
+        if (b is RationalReal q)
+        {
+            if (a is RationalReal p)
+                return new RationalReal(p.Value / q.Value);
+            if (q.Value.IsZero)
+                throw new DivideByZeroException("The divisor is 0.");
+            if (q.Value == Rational.One)
+                return a;
+        }
+        else if (a is RationalReal { Value.IsZero: true })
+        {
+            return a;
+        }
+
+        return ReferenceEquals(a, b) ? One : new OperationReal(Operation.Divide, a, b, Interval.Divide(a, b));
+    }
+
+    /// <summary>The number with the other sign.</summary>
+    public static Real operator -(Real a) => a is RationalReal p
+        ? new RationalReal(-p.Value)
+        : new OperationReal(Operation.Subtract, Zero, a, Interval.Subtract(Zero, a));
+
+    /// <summary>The root that is not negative. The caller has decided that <paramref name="radicand"/> is not negative.</summary>
+    /// <exception cref="ArgumentException"><paramref name="radicand"/> is a negative rational.</exception>
+    public static Real Sqrt(Real radicand)
+    {
+        if (radicand is RationalReal p)
+        {
+            if (p.Value.Sign < 0)
+                throw new ArgumentException("A negative number has no real root.", nameof(radicand));
+            if (IntegerRoot.TryExact(p.Value.Numerator, out var numerator) && IntegerRoot.TryExact(p.Value.Denominator, out var denominator))
+                return new RationalReal(new Rational(numerator, denominator));
+        }
+
+        return new OperationReal(Operation.Sqrt, radicand, null, Interval.Sqrt(radicand));
+    }
+
     /// <summary>A number or length given in the script: its value is known exactly; identities are sought for every value of it.</summary>
-    public static Real Given(string name, Rational value, Rational? from = null, Rational? to = null) => throw new NotImplementedException();
+    public static Real Given(string name, Rational value, Rational? from = null, Rational? to = null) => new GivenReal(name, value, from, to);
+
     /// <summary>The value when it is structurally a rational; no decision is made.</summary>
-    public bool TryGetRational(out Rational value) => throw new NotImplementedException();
+    public bool TryGetRational(out Rational value)
+    {
+        value = this is RationalReal rational ? rational.Value : default;
+        return this is RationalReal;
+    }
+
     /// <summary>Within one unit in the last place of the true value.</summary>
-    public double ToDouble() => throw new NotImplementedException();
+    public double ToDouble()
+    {
+        if (Low == High || High <= Math.BitIncrement(Low))
+            return Low;
+
+        return Enclosures.ToDouble(this);
+    }
+
+    /// <summary>Keeps the tighter bounds.</summary>
+    internal void Tighten((double Low, double High) bounds)
+    {
+        if (bounds.Low > Low)
+            Low = bounds.Low;
+        if (bounds.High < High)
+            High = bounds.High;
+    }
 }

@@ -207,7 +207,7 @@ internal static class LanguageFindings
         "RC1023",
         $"an angle is expected, and `{number}` has no mark",
         span,
-        number.Contains('/', StringComparison.Ordinal) ? $"write `{number} deg` or `{number} turn`" : $"write `{number}°`, `{number}'` or `{number} turn`");
+        $"write {(number.Contains('/', StringComparison.Ordinal) ? $"`{number} turn`" : $"`{number}°`")}, say; an angle ends in `°`, `'`, `\"`, `deg` or `turn`");
 
     internal static Diagnostic UnknownFunction(string name, SourceSpan span)
     {

@@ -1,0 +1,269 @@
+using System.Collections.Immutable;
+using System.Numerics;
+
+namespace RuleAndCompass.Numbers;
+
+/// <summary>
+/// Decides identities for every value of the quantities in them: each is replaced by a random rational near its value, an angle by a
+/// random rational point of the unit circle, and the ordinary tower decides there.
+/// </summary>
+/// <remarks>
+/// Let x vanish at the random point without vanishing identically. Then the norm of x, a polynomial P in the unknowns with algebraic
+/// integers for coefficients, vanishes there too. Its degree is at most the sum over the conjugates of x, so that the chance is at most
+/// degree / 2^(random bits): J. T. Schwartz, J. ACM 27 (1980). With one unknown t = a/2^B and a odd, P(t) = 0 makes 2^B divide the
+/// leading coefficient; where B exceeds a bound of that coefficient's size, x vanishes identically: then it is proved. The bound is
+/// taken on the circle |t| = 1, where Cauchy's inequality bounds every coefficient.
+/// The value at the random point tells about the value at hand because no radicand and no divisor vanishes between: balls show it.
+/// </remarks>
+internal sealed class GenericPoint
+{
+    private const int RandomBits = 192;
+    private const int LeastCertainty = 128;
+    private const int MostProofBits = 4096;
+    private const int FirstNearness = 40;
+    private const int MostNearness = 640;
+
+    private readonly SeededBits random;
+    private readonly CancellationToken cancellation;
+    private readonly List<Real> leaves;
+    private readonly List<Unknown> unknowns = [];
+    private readonly Dictionary<Real, int> unknownOf = new(ReferenceEqualityComparer.Instance);
+
+    public GenericPoint(List<Real> leaves, SeededBits random, CancellationToken cancellation)
+    {
+        this.random = random;
+        this.cancellation = cancellation;
+        this.leaves = leaves;
+        foreach (Real leaf in leaves)
+            Place(leaf);
+    }
+
+    // A number has no source.
+    private sealed class Unknown(AngleSource? source, Real? number)
+    {
+        public AngleSource? Source { get; } = source;
+
+        public Real? Number { get; } = number;
+
+        public Rational Unit { get; set; }
+
+        public Rational Near { get; set; }
+
+        public string? Words { get; init; }
+    }
+
+    /// <summary>The verdict where <paramref name="x"/> vanishes identically; null where it does not, or where this cannot tell.</summary>
+    public Verdict? TryVanishing(Real x, int maximumDegree)
+    {
+        for (int nearness = FirstNearness; nearness <= MostNearness; nearness *= 2)
+        {
+            int bits = RandomBits + nearness;
+            var standIns = new Dictionary<Real, Real>(ReferenceEqualityComparer.Instance);
+            if (!Draw(nearness, bits) || !Fill(standIns))
+                return null;
+
+            StraightLine line = StraightLine.Compile(x, leaf => standIns[leaf])!;
+            Bounds bounds = Bounds.Of(line, IndexOf(line, standIns), unknowns.Count);
+            if (bounds.LogDegree > RandomBits - LeastCertainty)
+                return null;
+
+            int proofBits = unknowns.Count == 1 ? bounds.ProofBits : int.MaxValue;
+            bool proves = proofBits <= MostProofBits;
+            if (proves && proofBits > bits)
+            {
+                Lengthen(proofBits + 8);
+                standIns.Clear();
+                Fill(standIns);
+                line = StraightLine.Compile(x, leaf => standIns[leaf])!;
+            }
+
+            FieldElement[] elements;
+            FieldElement value;
+            try
+            {
+                var tower = new Tower(maximumDegree, cancellation);
+                value = ExactEvaluation.Run(line, tower, cancellation, out elements);
+            }
+            catch (Exception failure) when (failure is NegativeRadicandException or TowerTooHighException or DivideByZeroException)
+            {
+                if (failure is TowerTooHighException)
+                    return null;
+                continue;
+            }
+
+            if (!value.IsZero)
+                return null;
+            if (!BranchHolds(line, elements, standIns, nearness))
+                continue;
+
+            ImmutableArray<string> names = [.. unknowns.Where(unknown => unknown.Words is not null).Select(unknown => unknown.Words!)];
+            int size = RandomBits - bounds.LogDegree;
+            return (proves, names.IsEmpty) switch
+            {
+                (true, true) => Verdict.Proved,
+                (true, false) => new Verdict(Certainty.ProvedForEvery, 0, names),
+                (false, true) => new Verdict(Certainty.Certain, size, []),
+                _ => new Verdict(Certainty.CertainForEvery, size, names),
+            };
+        }
+
+        return null;
+    }
+
+    private void Place(Real leaf)
+    {
+        if (leaf is not DirectionReal direction)
+        {
+            unknownOf[leaf] = unknowns.Count;
+            unknowns.Add(new Unknown(null, leaf) { Words = leaf is GivenReal given ? Words(given.Name, given.From, given.To, "") : null });
+            return;
+        }
+
+        int at = unknowns.FindIndex(unknown => ReferenceEquals(unknown.Source, direction.Source));
+        if (at < 0)
+        {
+            at = unknowns.Count;
+            AngleSource source = direction.Source;
+            string? words = source.Name is null ? null : Words(source.Name, source.From, source.To, "°");
+            unknowns.Add(new Unknown(source, null) { Unit = direction.Multiple.Abs(), Words = words });
+        }
+        else
+        {
+            unknowns[at].Unit = CommonMeasure(unknowns[at].Unit, direction.Multiple.Abs());
+        }
+
+        unknownOf[leaf] = at;
+    }
+
+    private static string Words(string name, Rational? from, Rational? to, string sign) =>
+        from is { } low && to is { } high ? $"{name} from {low}{sign} to {high}{sign}" : name;
+
+    private static Rational CommonMeasure(Rational a, Rational b)
+    {
+        BigInteger denominator = a.Denominator * b.Denominator / BigInteger.GreatestCommonDivisor(a.Denominator, b.Denominator);
+        return new Rational(
+            BigInteger.GreatestCommonDivisor(a.Numerator * (denominator / a.Denominator), b.Numerator * (denominator / b.Denominator)),
+            denominator);
+    }
+
+    // Values that agree with the true ones to `nearness` bits and go on with random ones, the last bit odd.
+    private bool Draw(int nearness, int bits)
+    {
+        foreach (Unknown unknown in unknowns)
+        {
+            Ball near = ParameterOf(unknown, nearness + 32);
+            if (near.IsUnknown)
+                return false;
+            BigInteger lead = near.FloorAt(-nearness, upper: false);
+            unknown.Near = new Rational(lead << (bits - nearness) | random.NextInteger(bits - nearness) | 1, BigInteger.One << bits);
+        }
+
+        return true;
+    }
+
+    private void Lengthen(int bits)
+    {
+        foreach (Unknown unknown in unknowns)
+        {
+            int more = bits - (int)(unknown.Near.Denominator.GetBitLength() - 1);
+            unknown.Near = new Rational(unknown.Near.Numerator << more | 1, unknown.Near.Denominator << more);
+        }
+    }
+
+    // The number itself, or the tangent of half the unit angle.
+    private static Ball ParameterOf(Unknown unknown, int bits)
+    {
+        if (unknown.Number is { } number)
+            return Enclosures.Of(number, bits);
+
+        (Ball cosine, Ball sine) = Elementary.OfDegrees(
+            Ball.Multiply(Enclosures.Of(unknown.Source!.Degrees, bits + 16), Ball.Of(unknown.Unit, bits + 16), bits + 16), bits + 16);
+        return Ball.Divide(sine, Ball.Add(Ball.Of(1, bits), cosine, bits), bits);
+    }
+
+    private bool Fill(Dictionary<Real, Real> standIns)
+    {
+        foreach (Real leaf in leaves)
+        {
+            Unknown unknown = unknowns[unknownOf[leaf]];
+            if (leaf is not DirectionReal direction)
+            {
+                standIns[leaf] = unknown.Near;
+                continue;
+            }
+
+            BigInteger times = (direction.Multiple / unknown.Unit).Numerator;
+            if (BigInteger.Abs(times) > 1000)
+                return false;
+            BigInteger a = unknown.Near.Numerator;
+            BigInteger b = unknown.Near.Denominator;
+            (BigInteger X, BigInteger Y) power = Power((b * b - a * a, 2 * a * b), (int)BigInteger.Abs(times));
+            BigInteger length = BigInteger.Pow(a * a + b * b, (int)BigInteger.Abs(times));
+            Rational part = new(direction.IsSine ? power.Y * times.Sign : power.X, length);
+            standIns[leaf] = part;
+        }
+
+        return true;
+    }
+
+    private static (BigInteger X, BigInteger Y) Power((BigInteger X, BigInteger Y) unit, int exponent)
+    {
+        (BigInteger X, BigInteger Y) result = (BigInteger.One, BigInteger.Zero);
+        for (int i = 0; i < exponent; i++)
+            result = (result.X * unit.X - result.Y * unit.Y, result.X * unit.Y + result.Y * unit.X);
+        return result;
+    }
+
+    private Dictionary<int, (int Unknown, int Degree)> IndexOf(StraightLine line, Dictionary<Real, Real> standIns)
+    {
+        var places = new Dictionary<int, (int, int)>();
+        foreach (Real leaf in leaves)
+        {
+            Rational value = ((RationalReal)standIns[leaf]).Value;
+            Unknown unknown = unknowns[unknownOf[leaf]];
+            int degree = leaf is DirectionReal direction ? 2 * (int)BigInteger.Abs((direction.Multiple / unknown.Unit).Numerator) : -1;
+            for (int i = 0; i < line.Count; i++)
+            {
+                if (line[i].IsConstant && line[i].Value == value)
+                    places[i] = (unknownOf[leaf], degree);
+            }
+        }
+
+        return places;
+    }
+
+    // No radicand and no divisor vanishes while the unknowns move from their values to the random ones.
+    private bool BranchHolds(StraightLine line, FieldElement[] elements, Dictionary<Real, Real> standIns, int nearness)
+    {
+        int bits = nearness + 128;
+        var hulls = new Dictionary<int, Ball>();
+        foreach (Real leaf in leaves)
+        {
+            Rational value = ((RationalReal)standIns[leaf]).Value;
+            Unknown unknown = unknowns[unknownOf[leaf]];
+            // |t − t*| ≤ 2^(2−nearness), and the point turns by at most twice that for each multiple.
+            BigInteger factor = leaf is DirectionReal direction ? 2 * BigInteger.Abs((direction.Multiple / unknown.Unit).Numerator) : 1;
+            Ball hull = Ball.Around(BigInteger.Zero, 2 - nearness, factor, bits);
+            hull = Ball.Of(value, bits).Widened(Ball.Around(factor, 2 - nearness, BigInteger.Zero, bits), bits);
+            for (int i = 0; i < line.Count; i++)
+            {
+                if (line[i].IsConstant && line[i].Value == value)
+                    hulls[i] = hull;
+            }
+        }
+
+        Ball[] balls = ExactEvaluation.Balls(line, hulls, bits);
+        for (int i = 0; i < line.Count; i++)
+        {
+            StraightLine.Instruction step = line[i];
+            if (step.IsConstant)
+                continue;
+            if (step.Operation == Operation.Divide && balls[step.Right].ContainsZero)
+                return false;
+            if (step.Operation == Operation.Sqrt && balls[step.Left].Sign <= 0 && !elements[step.Left].IsZero)
+                return false;
+        }
+
+        return true;
+    }
+}

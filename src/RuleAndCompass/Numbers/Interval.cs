@@ -1,0 +1,69 @@
+namespace RuleAndCompass.Numbers;
+
+/// <summary>
+/// Two doubles that enclose a number. <c>+ − × ÷ √</c> of doubles are correctly rounded, so one step outward from each rounded bound is sound.
+/// </summary>
+/// <remarks>R. E. Moore, Interval Analysis (1966).</remarks>
+internal readonly struct Interval(double low, double high)
+{
+    public readonly double Low = low;
+    public readonly double High = high;
+
+    public static Interval Everything => new(double.NegativeInfinity, double.PositiveInfinity);
+
+    public static Interval Of(Rational value)
+    {
+        double near = value.ToDouble();
+        if (value.IsInteger && Math.Abs(near) <= 9007199254740992.0)
+            return new(near, near);
+
+        return new(Math.BitDecrement(near), Math.BitIncrement(near));
+    }
+
+    public static Interval Add(Real a, Real b) => Outward(a.Low + b.Low, a.High + b.High);
+
+    public static Interval Subtract(Real a, Real b) => Outward(a.Low - b.High, a.High - b.Low);
+
+    public static Interval Multiply(Real a, Real b)
+    {
+        if (a.Low >= 0 && b.Low >= 0)
+            return Outward(a.Low * b.Low, a.High * b.High);
+
+        double p = a.Low * b.Low;
+        double q = a.Low * b.High;
+        double r = a.High * b.Low;
+        double s = a.High * b.High;
+        // Math.Min and Max pass NaN on, which Outward takes for "nothing known".
+        return Outward(Math.Min(Math.Min(p, q), Math.Min(r, s)), Math.Max(Math.Max(p, q), Math.Max(r, s)));
+    }
+
+    public static Interval Divide(Real a, Real b)
+    {
+        if (b.Low <= 0 && b.High >= 0)
+            return Everything;
+
+        if (a.Low >= 0 && b.Low > 0)
+            return Outward(a.Low / b.High, a.High / b.Low);
+
+        double p = a.Low / b.Low;
+        double q = a.Low / b.High;
+        double r = a.High / b.Low;
+        double s = a.High / b.High;
+        return Outward(Math.Min(Math.Min(p, q), Math.Min(r, s)), Math.Max(Math.Max(p, q), Math.Max(r, s)));
+    }
+
+    /// <summary>The radicand is not negative, whatever its enclosure says.</summary>
+    public static Interval Sqrt(Real a)
+    {
+        Interval root = Outward(Math.Sqrt(Math.Max(a.Low, 0)), Math.Sqrt(Math.Max(a.High, 0)));
+        return new(Math.Max(root.Low, 0), root.High);
+    }
+
+    private static Interval Outward(double low, double high)
+    {
+        if (double.IsNaN(low) || double.IsNaN(high))
+            return Everything;
+
+        return new(Math.BitDecrement(low), Math.BitIncrement(high));
+    }
+}

@@ -1,0 +1,149 @@
+namespace RuleAndCompass.Numbers;
+
+/// <summary>
+/// The sub-graph of one number as a list of instructions, operands first, equal ones merged. Leaves without a rational value are
+/// replaced before, so that a program has rationals, the four operations and square roots only.
+/// </summary>
+internal sealed class StraightLine
+{
+    private readonly Dictionary<Rational, int> constantIndex = [];
+    private readonly Dictionary<(Operation Operation, int Left, int Right), int> operationIndex = [];
+    private readonly List<Instruction> instructions = [];
+
+    private StraightLine()
+    {
+    }
+
+    /// <param name="IsConstant">Then <paramref name="Value"/> counts, else the operation on the instructions Left and Right.</param>
+    public readonly record struct Instruction(bool IsConstant, Rational Value, Operation Operation, int Left, int Right);
+
+    public IReadOnlyList<Instruction> Instructions => instructions;
+
+    public int Count => instructions.Count;
+
+    public Instruction this[int index] => instructions[index];
+
+    /// <summary>Null where <paramref name="replace"/> gives null for a leaf that stands in the graph.</summary>
+    /// <param name="x">The number.</param>
+    /// <param name="replace">The stand-in of a leaf: a quantity or the angle of a vector.</param>
+    public static StraightLine? Compile(Real x, Func<Real, Real?> replace)
+    {
+        var line = new StraightLine();
+        var index = new Dictionary<Real, int>(ReferenceEqualityComparer.Instance);
+        var standIns = new Dictionary<Real, Real>(ReferenceEqualityComparer.Instance);
+        var stack = new Stack<Real>();
+        stack.Push(x);
+        while (stack.TryPeek(out Real? node))
+        {
+            if (index.ContainsKey(node))
+            {
+                stack.Pop();
+                continue;
+            }
+
+            if (node is RationalReal rational)
+            {
+                index[node] = line.Constant(rational.Value);
+                continue;
+            }
+
+            if (IsLeaf(node))
+            {
+                if (!standIns.TryGetValue(node, out Real? standIn))
+                {
+                    standIn = replace(node);
+                    if (standIn is null)
+                        return null;
+                    standIns.Add(node, standIn);
+                }
+
+                if (!index.TryGetValue(standIn, out int at))
+                {
+                    stack.Push(standIn);
+                    continue;
+                }
+
+                index[node] = at;
+                continue;
+            }
+
+            var operation = (OperationReal)node;
+            bool hasLeft = index.TryGetValue(operation.Left, out int left);
+            int right = left;
+            bool hasRight = operation.Right is null || index.TryGetValue(operation.Right, out right);
+            if (operation.Right is null)
+                right = left;
+            if (!hasLeft || !hasRight)
+            {
+                if (!hasLeft)
+                    stack.Push(operation.Left);
+                if (!hasRight)
+                    stack.Push(operation.Right!);
+                continue;
+            }
+
+            index[node] = line.Operate(operation.Operation, left, right);
+        }
+
+        // The last instruction is the number itself even where it merged with an earlier one.
+        line.Result = index[x];
+        return line;
+    }
+
+    public int Result { get; private set; }
+
+    /// <summary>The leaves below <paramref name="x"/>: quantities and angles of vectors, each once.</summary>
+    public static List<Real> LeavesOf(Real x)
+    {
+        var leaves = new List<Real>();
+        var seen = new HashSet<Real>(ReferenceEqualityComparer.Instance);
+        var stack = new Stack<Real>();
+        stack.Push(x);
+        while (stack.TryPop(out Real? node))
+        {
+            if (node is RationalReal || !seen.Add(node))
+                continue;
+
+            if (IsLeaf(node))
+            {
+                leaves.Add(node);
+                continue;
+            }
+
+            var operation = (OperationReal)node;
+            stack.Push(operation.Left);
+            if (operation.Right is not null)
+                stack.Push(operation.Right);
+        }
+
+        return leaves;
+    }
+
+    private static bool IsLeaf(Real node) => node is QuantityReal or OperationReal { Operation: Operation.DegreesOfVector };
+
+    private int Constant(Rational value)
+    {
+        if (!constantIndex.TryGetValue(value, out int at))
+        {
+            at = instructions.Count;
+            instructions.Add(new Instruction(true, value, default, 0, 0));
+            constantIndex.Add(value, at);
+        }
+
+        return at;
+    }
+
+    private int Operate(Operation operation, int left, int right)
+    {
+        if (operation is Operation.Add or Operation.Multiply && left > right)
+            (left, right) = (right, left);
+        if (!operationIndex.TryGetValue((operation, left, right), out int at))
+        {
+            at = instructions.Count;
+            instructions.Add(new Instruction(false, default, operation, left, right));
+            operationIndex.Add((operation, left, right), at);
+        }
+
+        return at;
+    }
+}

@@ -1,0 +1,389 @@
+using System.Numerics;
+
+namespace RuleAndCompass.Numbers;
+
+/// <summary>
+/// A real field Q ⊂ Q(√r₁) ⊂ Q(√r₁, √r₂) …, each radicand from the storeys below and no square there, so that a number is zero
+/// exactly when its coefficients are.
+/// </summary>
+/// <remarks>
+/// Roots that lie in the field already are found by the norm: r = x + y√d is a square exactly when x² − y²d is a square n² one storey
+/// down and one of (x ± n)/2 is. S. Landau, Simplification of nested radicals, SIAM J. Comput. 21 (1992); A. Borodin, R. Fagin,
+/// J. Hopcroft and M. Tompa, Decreasing the nesting depth of expressions involving square roots, J. Symb. Comput. 1 (1985).
+/// </remarks>
+internal sealed class Tower(int maximumDegree, CancellationToken cancellation)
+{
+    private const int MostGenerators = 60;
+
+    private readonly List<Generator> generators = [];
+    private Ball[] balls = [];
+    private int ballBits;
+
+    /// <summary>The positive root of an integral radicand from below.</summary>
+    private sealed record Generator(FieldElement Radicand);
+
+    public long Degree => 1L << generators.Count;
+
+    public FieldElement RadicandOf(int generator) => generators[generator].Radicand;
+
+    public static FieldElement Add(FieldElement a, FieldElement b) => Sum(a, b, subtract: false);
+
+    public static FieldElement Subtract(FieldElement a, FieldElement b) => Sum(a, b, subtract: true);
+
+    public FieldElement Multiply(FieldElement a, FieldElement b)
+    {
+        if (a.IsZero || b.IsZero)
+            return FieldElement.Zero;
+
+        ulong all = Closed(a.Generators | b.Generators, a.Generators & b.Generators);
+        int[] levels = Levels(all);
+        var product = new BigInteger[1 << levels.Length];
+        MultiplyInto(product, a.Spread(all), b.Spread(all), levels.Length, all, levels);
+        return FieldElement.Normal(all, product, a.Denominator * b.Denominator);
+    }
+
+    /// <exception cref="DivideByZeroException">It is zero.</exception>
+    public FieldElement Invert(FieldElement a)
+    {
+        cancellation.ThrowIfCancellationRequested();
+        if (a.IsRational)
+            return FieldElement.Of(Rational.One / a.ToRational());
+
+        (FieldElement low, FieldElement high, int top) = Split(a);
+        FieldElement radicand = generators[top].Radicand;
+        FieldElement norm = Subtract(Multiply(low, low), Multiply(Multiply(high, high), radicand));
+        FieldElement inverse = Invert(norm);
+        return Multiply(Join(low, high.Negated(), top), inverse);
+    }
+
+    /// <summary>The root that is not negative of an element that is not negative; the field grows where it has none.</summary>
+    public FieldElement Sqrt(FieldElement radicand)
+    {
+        if (radicand.IsZero)
+            return radicand;
+
+        // √(R/d) = √(R d)/d with the square factors of R d taken out.
+        var integral = new FieldElement(radicand.Generators, radicand.Coefficients, BigInteger.One);
+        BigInteger content = Content(integral.Coefficients);
+        BigInteger outside = SquareFactors(content * radicand.Denominator, out BigInteger rest);
+        FieldElement primitive = Divided(integral, content).Times(rest);
+        FieldElement root = IntegralSqrt(primitive);
+        return root.Times(outside).Over(radicand.Denominator);
+    }
+
+    /// <summary>The sign of an element by balls as fine as it takes.</summary>
+    public int Sign(FieldElement a)
+    {
+        if (a.IsRational)
+            return a.Coefficients[0].Sign;
+
+        for (int bits = 64; ; bits *= 2)
+        {
+            cancellation.ThrowIfCancellationRequested();
+            int sign = BallOf(a, bits).Sign;
+            if (sign != 0)
+                return sign;
+        }
+    }
+
+    public Ball BallOf(FieldElement a, int bits)
+    {
+        EnsureBalls(bits);
+        return Evaluate(a, bits);
+    }
+
+    private Ball Evaluate(FieldElement a, int bits)
+    {
+        int[] levels = Levels(a.Generators);
+        Ball sum = Horner(a.Coefficients, levels.Length, levels, bits);
+        return a.Denominator.IsOne ? sum : Ball.Divide(sum, Ball.Of(a.Denominator, bits), bits);
+    }
+
+    private Ball Horner(ReadOnlySpan<BigInteger> coefficients, int level, int[] levels, int bits)
+    {
+        if (level == 0)
+            return Ball.Of(coefficients[0], bits);
+
+        int half = coefficients.Length / 2;
+        Ball low = Horner(coefficients[..half], level - 1, levels, bits);
+        Ball high = Horner(coefficients[half..], level - 1, levels, bits);
+        return Ball.Add(low, Ball.Multiply(high, balls[levels[level - 1]], bits), bits);
+    }
+
+    private void EnsureBalls(int bits)
+    {
+        if (ballBits >= bits && balls.Length == generators.Count)
+            return;
+
+        int from = ballBits >= bits ? balls.Length : 0;
+        bits = Math.Max(bits, ballBits);
+        Array.Resize(ref balls, generators.Count);
+        ballBits = bits;
+        for (int i = from; i < balls.Length; i++)
+            balls[i] = Ball.Sqrt(Evaluate(generators[i].Radicand, bits), bits);
+    }
+
+    private FieldElement IntegralSqrt(FieldElement radicand)
+    {
+        for (int i = 0; i < generators.Count; i++)
+        {
+            if (generators[i].Radicand.SameAs(radicand))
+                return Single(i);
+        }
+
+        FieldElement? root = FindRoot(radicand, generators.Count);
+        if (root is not null)
+            return Sign(root) < 0 ? root.Negated() : root;
+
+        if (Sign(radicand) < 0)
+            throw new NegativeRadicandException();
+        if (2 * Degree > maximumDegree || generators.Count == MostGenerators)
+            throw new TowerTooHighException(2 * Degree);
+
+        generators.Add(new Generator(radicand));
+        return Single(generators.Count - 1);
+    }
+
+    // A root among the first `storeys` generators' elements, of either sign; null where there is none.
+    private FieldElement? FindRoot(FieldElement radicand, int storeys)
+    {
+        cancellation.ThrowIfCancellationRequested();
+        if (radicand.IsZero)
+            return radicand;
+
+        if (radicand.IsRational)
+        {
+            Rational value = radicand.ToRational();
+            if (IntegerRoot.TryExact(value.Numerator, out BigInteger n) && IntegerRoot.TryExact(value.Denominator, out BigInteger d))
+                return FieldElement.Of(new Rational(n, d));
+        }
+
+        if (storeys == 0)
+            return null;
+
+        int top = storeys - 1;
+        FieldElement below = generators[top].Radicand;
+        if ((radicand.Generators >> top & 1) == 0)
+        {
+            // x is a square here exactly when x or x d is one below: √x, or √(x d)/d times the generator.
+            if (FindRoot(radicand, top) is { } same)
+                return same;
+            return FindRoot(Multiply(radicand, below), top) is { } other
+                ? Join(FieldElement.Zero, Multiply(other, Invert(below)), top)
+                : null;
+        }
+
+        (FieldElement x, FieldElement y, _) = Split(radicand);
+        FieldElement norm = Subtract(Multiply(x, x), Multiply(Multiply(y, y), below));
+        if (FindRoot(norm, top) is not { } n2)
+            return null;
+
+        foreach (FieldElement twice in (ReadOnlySpan<FieldElement>)[Add(x, n2), Subtract(x, n2)])
+        {
+            if (twice.IsZero || FindRoot(twice.Over(2), top) is not { } a)
+                continue;
+            FieldElement b = Multiply(y, Invert(a.Times(2)));
+            FieldElement found = Join(a, b, top);
+            if (Multiply(found, found).SameAs(radicand))
+                return found;
+        }
+
+        return null;
+    }
+
+    private static FieldElement Single(int generator) => new(1UL << generator, [BigInteger.Zero, BigInteger.One], BigInteger.One);
+
+    private static FieldElement Sum(FieldElement a, FieldElement b, bool subtract)
+    {
+        ulong all = a.Generators | b.Generators;
+        BigInteger[] first = a.Spread(all);
+        BigInteger[] second = b.Spread(all);
+        var sum = new BigInteger[first.Length];
+        bool same = a.Denominator == b.Denominator;
+        for (int i = 0; i < sum.Length; i++)
+        {
+            BigInteger p = same ? first[i] : first[i] * b.Denominator;
+            BigInteger q = same ? second[i] : second[i] * a.Denominator;
+            sum[i] = subtract ? p - q : p + q;
+        }
+
+        return FieldElement.Normal(all, sum, same ? a.Denominator : a.Denominator * b.Denominator);
+    }
+
+    // a = low + high × the highest generator.
+    private static (FieldElement Low, FieldElement High, int Top) Split(FieldElement a)
+    {
+        int top = 63 - BitOperations.LeadingZeroCount(a.Generators);
+        int half = a.Coefficients.Length / 2;
+        ulong lower = a.Generators & ~(1UL << top);
+        return (
+            FieldElement.Normal(lower, a.Coefficients[..half], a.Denominator),
+            FieldElement.Normal(lower, a.Coefficients[half..], a.Denominator),
+            top);
+    }
+
+    private static FieldElement Join(FieldElement low, FieldElement high, int top)
+    {
+        ulong lower = low.Generators | high.Generators;
+        BigInteger[] first = low.Spread(lower);
+        BigInteger[] second = high.Spread(lower);
+        var joined = new BigInteger[2 * first.Length];
+        for (int i = 0; i < first.Length; i++)
+        {
+            joined[i] = first[i] * high.Denominator;
+            joined[first.Length + i] = second[i] * low.Denominator;
+        }
+
+        return FieldElement.Normal(lower | 1UL << top, joined, low.Denominator * high.Denominator);
+    }
+
+    private ulong Closed(ulong all, ulong shared)
+    {
+        // The square of a shared generator brings in what stands in its radicand, and so on down.
+        for (int i = generators.Count - 1; i >= 0; i--)
+        {
+            if ((shared >> i & 1) == 0)
+                continue;
+            ulong inner = generators[i].Radicand.Generators;
+            shared |= inner;
+            all |= inner;
+        }
+
+        return all;
+    }
+
+    private static int[] Levels(ulong all)
+    {
+        var levels = new int[BitOperations.PopCount(all)];
+        for (int i = 0; all != 0; all &= all - 1)
+            levels[i++] = BitOperations.TrailingZeroCount(all);
+        return levels;
+    }
+
+    private void MultiplyInto(Span<BigInteger> product, ReadOnlySpan<BigInteger> a, ReadOnlySpan<BigInteger> b, int level, ulong all, int[] levels)
+    {
+        if (level == 0)
+        {
+            product[0] = a[0].IsZero || b[0].IsZero ? BigInteger.Zero : a[0] * b[0];
+            return;
+        }
+
+        int half = a.Length / 2;
+        ReadOnlySpan<BigInteger> a0 = a[..half], a1 = a[half..], b0 = b[..half], b1 = b[half..];
+        bool noA1 = IsZero(a1), noB1 = IsZero(b1);
+        Span<BigInteger> low = product[..half], high = product[half..];
+        if (noA1 && noB1)
+        {
+            MultiplyInto(low, a0, b0, level - 1, all, levels);
+            high.Clear();
+            return;
+        }
+
+        if (noA1 || noB1)
+        {
+            MultiplyInto(low, a0, b0, level - 1, all, levels);
+            if (noA1)
+                MultiplyInto(high, a0, b1, level - 1, all, levels);
+            else
+                MultiplyInto(high, a1, b0, level - 1, all, levels);
+            return;
+        }
+
+        // (a0 + a1 g)(b0 + b1 g) with three products, and the square of g from below.
+        var top = new BigInteger[half];
+        MultiplyInto(top, a1, b1, level - 1, all, levels);
+        var sumA = new BigInteger[half];
+        var sumB = new BigInteger[half];
+        for (int i = 0; i < half; i++)
+        {
+            sumA[i] = a0[i] + a1[i];
+            sumB[i] = b0[i] + b1[i];
+        }
+
+        MultiplyInto(high, sumA, sumB, level - 1, all, levels);
+        MultiplyInto(low, a0, b0, level - 1, all, levels);
+        for (int i = 0; i < half; i++)
+            high[i] -= low[i] + top[i];
+
+        FieldElement radicand = generators[levels[level - 1]].Radicand;
+        if (radicand.IsRational)
+        {
+            for (int i = 0; i < half; i++)
+                low[i] += top[i] * radicand.Coefficients[0];
+            return;
+        }
+
+        ulong lower = all & ((1UL << levels[level - 1]) - 1);
+        MultiplyInto(sumA, top, radicand.Spread(lower), level - 1, all, levels);
+        for (int i = 0; i < half; i++)
+            low[i] += sumA[i];
+    }
+
+    private static bool IsZero(ReadOnlySpan<BigInteger> span)
+    {
+        foreach (BigInteger value in span)
+        {
+            if (!value.IsZero)
+                return false;
+        }
+
+        return true;
+    }
+
+    private static BigInteger Content(BigInteger[] coefficients)
+    {
+        BigInteger content = BigInteger.Zero;
+        foreach (BigInteger coefficient in coefficients)
+        {
+            content = BigInteger.GreatestCommonDivisor(content, coefficient);
+            if (content.IsOne)
+                break;
+        }
+
+        return content;
+    }
+
+    private static FieldElement Divided(FieldElement integral, BigInteger content)
+    {
+        if (content.IsOne)
+            return integral;
+
+        var coefficients = new BigInteger[integral.Coefficients.Length];
+        for (int i = 0; i < coefficients.Length; i++)
+            coefficients[i] = integral.Coefficients[i] / content;
+        return integral with { Coefficients = coefficients };
+    }
+
+    // value = outside² × rest; squares of small primes and a whole square are found, others may stay in the rest.
+    private static BigInteger SquareFactors(BigInteger value, out BigInteger rest)
+    {
+        if (IntegerRoot.TryExact(value, out BigInteger root))
+        {
+            rest = BigInteger.One;
+            return root;
+        }
+
+        BigInteger outside = BigInteger.One;
+        foreach (int prime in (ReadOnlySpan<int>)[2, 3, 5, 7, 11, 13])
+        {
+            int square = prime * prime;
+            while (BigInteger.Remainder(value, square).IsZero)
+            {
+                value /= square;
+                outside *= prime;
+            }
+        }
+
+        rest = value;
+        return outside;
+    }
+}
+
+/// <summary>A number that was to be rooted is negative at the point of evaluation.</summary>
+internal sealed class NegativeRadicandException : Exception;
+
+/// <summary>The degree the tower would have reached.</summary>
+internal sealed class TowerTooHighException(long degree) : Exception
+{
+    public long Degree { get; } = degree;
+}
