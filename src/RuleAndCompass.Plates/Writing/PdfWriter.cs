@@ -14,10 +14,10 @@ public static class PdfWriter
     /// <summary>The file.</summary>
     /// <param name="title">What a reader of the file calls it.</param>
     /// <param name="scriptName">The script the pages came from; null leaves the mark out.</param>
-    /// <param name="progress">Told how many pages are written.</param>
+    /// <param name="progress">Told the part of the pages written, 0 to 1.</param>
     /// <exception cref="ArgumentException">There is no page.</exception>
     public static byte[] Write(
-        IReadOnlyList<Page> pages, string title, string? scriptName = null, IProgress<int>? progress = null, CancellationToken cancellation = default)
+        IReadOnlyList<Page> pages, string title, string? scriptName = null, IProgress<double>? progress = null, CancellationToken cancellation = default)
     {
         ArgumentNullException.ThrowIfNull(pages);
         if (pages.Count == 0)
@@ -46,7 +46,7 @@ public static class PdfWriter
                 SkiaPainter.Paint(canvas, page, cancellation);
                 document.EndPage();
                 sizes.Add(size);
-                progress?.Report(sizes.Count);
+                progress?.Report((double)sizes.Count / pages.Count);
             }
 
             document.Close();
