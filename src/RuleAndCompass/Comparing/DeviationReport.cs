@@ -75,7 +75,7 @@ public sealed record DeviationReport(
     private static HandResult? HandOf(HandErrorReport? hand, int comparison) =>
         hand?.Results.FirstOrDefault(result => result.Subject == HandSubject.Comparison && result.Index == comparison);
 
-    private static IEnumerable<string> HandSentences(HandErrorReport? hand)
+    internal static IEnumerable<string> HandSentences(HandErrorReport? hand)
     {
         if (hand is null)
             yield break;
@@ -89,7 +89,10 @@ public sealed record DeviationReport(
     }
 
     private static IEnumerable<string> BlameSentences(HandErrorReport? hand) =>
-        hand?.Blame.Select(blame => string.Create(CultureInfo.InvariantCulture, $"{blame.Share * 100,5:0.0} %  {(blame.Act == 0 ? "the plate" : $"act {blame.Act}")}: {blame.Why}")) ?? [];
+        hand?.Blame.Select(BlameSentence) ?? [];
+
+    internal static string BlameSentence(Blame blame) =>
+        string.Create(CultureInfo.InvariantCulture, $"{blame.Share * 100,5:0.0} %  {(blame.Act == 0 ? "the plate" : $"act {blame.Act}")}: {blame.Why}");
 
     private static IEnumerable<string> CountSentences(Layout layout)
     {

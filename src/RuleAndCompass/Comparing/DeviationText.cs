@@ -1,5 +1,4 @@
 using System.Collections.Immutable;
-using System.Globalization;
 using System.Text;
 
 namespace RuleAndCompass.Comparing;
@@ -8,7 +7,6 @@ namespace RuleAndCompass.Comparing;
 public static class DeviationText
 {
     private const string Margin = "  ";
-    private const string Gap = "   ";
     private const int Measure = 100;
 
     /// <summary>Sets a report out.</summary>
@@ -16,8 +14,8 @@ public static class DeviationText
     {
         ArgumentNullException.ThrowIfNull(report);
         StringBuilder text = new();
-        text.Append(report.Title).Append('\n').Append('=', Width(report.Title)).Append("\n\n");
-        Columns(text, [], [new HeadRow("Script", report.Script), .. report.Head], [row => row.Name, row => row.Says]);
+        text.Append(report.Title).Append('\n').Append('=', PlainTable.Width(report.Title)).Append("\n\n");
+        text.Append(PlainTable.Render([["Script", report.Script], .. report.Head.Select(row => new[] { row.Name, row.Says })], hasNames: false));
         if (report.Notes.Length > 0)
             Paragraphs(text, "Notes", report.Notes);
         Comparisons(text, report.Comparisons);
@@ -53,7 +51,7 @@ public static class DeviationText
             return;
         Heading(text, "Constructed beside computed");
         ImmutableArray<(string Name, Func<ComparisonRow, string> Cell)> columns = ComparisonColumns(rows);
-        Columns(text, [.. columns.Select(column => column.Name)], rows, [.. columns.Select(column => column.Cell)]);
+        text.Append(PlainTable.Render([[.. columns.Select(column => column.Name)], .. rows.Select(row => columns.Select(column => column.Cell(row)).ToArray())]));
     }
 
     private static void Claims(StringBuilder text, ImmutableArray<ClaimRow> rows)
@@ -61,24 +59,7 @@ public static class DeviationText
         if (rows.IsEmpty)
             return;
         Heading(text, "Claims");
-        Columns(text, [], rows, [row => row.Says, row => row.Holds == false ? row.Verdict.ToUpperInvariant() : row.Verdict, row => row.By ?? ""]);
-    }
-
-    private static void Columns<TRow>(StringBuilder text, ImmutableArray<string> names, ImmutableArray<TRow> rows, ImmutableArray<Func<TRow, string>> cells)
-    {
-        int[] widths = [.. cells.Select((cell, index) => Math.Max(rows.Max(row => Width(cell(row))), names.IsEmpty ? 0 : Width(names[index])))];
-        void Line(Func<int, string> cell)
-        {
-            StringBuilder line = new(Margin);
-            for (int index = 0; index < widths.Length; index++)
-                line.Append(index == 0 ? "" : Gap).Append(cell(index)).Append(' ', widths[index] - Width(cell(index)));
-            text.Append(line.ToString().TrimEnd()).Append('\n');
-        }
-
-        if (!names.IsEmpty)
-            Line(index => names[index]);
-        foreach (TRow row in rows)
-            Line(index => cells[index](row));
+        text.Append(PlainTable.Render([.. rows.Select(row => new[] { row.Says, row.Holds == false ? row.Verdict.ToUpperInvariant() : row.Verdict, row.By ?? "" })], hasNames: false));
     }
 
     private static void Paragraphs(StringBuilder text, string heading, ImmutableArray<string> paragraphs)
@@ -106,19 +87,16 @@ public static class DeviationText
         int column = 0;
         foreach (string word in paragraph.Split(' ', StringSplitOptions.RemoveEmptyEntries))
         {
-            if (column > 0 && column + 1 + Width(word) > Measure)
+            if (column > 0 && column + 1 + PlainTable.Width(word) > Measure)
             {
                 text.Append('\n');
                 column = 0;
             }
 
             text.Append(column == 0 ? Margin : " ").Append(word);
-            column += Width(word) + 1;
+            column += PlainTable.Width(word) + 1;
         }
 
         text.Append('\n');
     }
-
-    // Signs with a mark set over them count once.
-    private static int Width(string text) => StringInfo.ParseCombiningCharacters(text).Length;
 }
