@@ -45,6 +45,10 @@ internal readonly record struct PlateSet(int[]? Each, int From)
     }
 }
 
+/// <summary>Where a label stands.</summary>
+/// <param name="IsCrowded">No free place was found: it lies on something.</param>
+internal readonly record struct PlacedLabel(Box Box, bool IsCrowded);
+
 /// <summary>
 /// Finds free places for names and numbers: inside the drawing, on no line and on no other label. Only what shows on a plate together is kept apart, so a
 /// name can have one place from plate to plate.
@@ -54,8 +58,8 @@ internal sealed class LabelPlacement(Box window)
     private const double SmallestCellMillimetres = 4;
     private const double CellsAcross = 500;
     private const double LineCost = 10;
-    private const double LabelCost = 40;
-    private const double OutsideCost = 1000;
+    private const double LabelCost = 200;
+    private const double OutsideCost = 2000;
 
     private readonly double cellMillimetres = Math.Max(SmallestCellMillimetres, Math.Max(window.Width, window.Height) / CellsAcross);
     private readonly Dictionary<(int X, int Y), List<int>> cells = [];
@@ -137,7 +141,7 @@ internal sealed class LabelPlacement(Box window)
 
     /// <summary>Takes the first of the places that is free, else the one that covers least, and blocks it.</summary>
     /// <param name="places">Best first.</param>
-    public Box Place(IEnumerable<Box> places, PlateSet plates)
+    public PlacedLabel Place(IEnumerable<Box> places, PlateSet plates)
     {
         Box best = default;
         double least = double.PositiveInfinity;
@@ -156,13 +160,13 @@ internal sealed class LabelPlacement(Box window)
         }
 
         Block(best, plates);
-        return best;
+        return new(best, least > 0);
     }
 
     /// <summary>Places round a spot for a label of a size: beside it, then above and below, then in the corners, then further off.</summary>
     public static IEnumerable<Box> Around(Spot spot, double width, double height, double gap)
     {
-        foreach (double distance in new[] { gap, gap * 1.7, gap * 2.6 })
+        foreach (double distance in new[] { gap, gap * 1.7, gap * 2.6, gap * 3.8, gap * 5.2, gap * 7 })
         {
             double half = height / 2, slant = distance * 0.7;
             yield return Box.Of(spot.X + slant, spot.Y - slant - height, width, height);
@@ -179,7 +183,7 @@ internal sealed class LabelPlacement(Box window)
     /// <summary>Places beside a curve at a spot where it runs in a direction (of unit length): on either side, nearest first.</summary>
     public static IEnumerable<Box> Beside(Spot spot, double directionX, double directionY, double width, double height, double gap)
     {
-        foreach (double distance in new[] { gap, gap * 1.8 })
+        foreach (double distance in new[] { gap, gap * 1.8, gap * 3 })
         {
             foreach (int side in new[] { 1, -1 })
             {

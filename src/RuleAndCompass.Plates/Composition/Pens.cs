@@ -19,6 +19,8 @@ internal static class Pens
 
     public static Pen Now { get; } = new(Ink.Accent, Medium);
 
+    public static Pen NowThin { get; } = new(Ink.Accent, Finest);
+
     public static Pen NowHeavy { get; } = new(Ink.Accent, Plain);
 
     public static Pen Rule { get; } = new(Ink.Black, Fine);

@@ -15,7 +15,7 @@ internal sealed record PlateFormat(double Width, double Height, double ColumnWid
     public const double NumberSize = 2.6;
     public const double NumberWidth = 8;
     public const double TitleBlockHeight = 32;
-    public const double KeyHeight = 34;
+    public const double KeyHeight = 38;
     public const double ThumbnailRowHeight = 24;
     public const double FootHeight = 8;
 

@@ -45,7 +45,7 @@ internal sealed record SentenceBlock(int? Number, ImmutableArray<SentenceLine> L
         .Break(text, Typeface.Text, PlateFormat.NoteSize, format.Measure)
         .Select(line => new SentenceLine(line, null, PlateFormat.NoteSize, PlateFormat.NoteLeading));
 
-    private static string CrossesAt(double degrees) => "crosses at " + degrees.ToString(degrees < 9.95 ? "0.0" : "0", CultureInfo.InvariantCulture) + "°";
+    private static string CrossesAt(double degrees) => "at " + degrees.ToString(degrees < 9.95 ? "0.0" : "0", CultureInfo.InvariantCulture) + "°";
 }
 
 /// <summary>A line of the column.</summary>

@@ -5,7 +5,7 @@ namespace RuleAndCompass.Plates.Composition;
 /// <summary>What the signs mean, on the first plate.</summary>
 internal static class SignKey
 {
-    private const double RowHeight = 5.4;
+    private const double RowHeight = 5.3;
 
     public static void Draw(Canvas canvas, PlateFormat format)
     {
@@ -33,6 +33,9 @@ internal static class SignKey
         y += RowHeight;
         Row(left, "number of the act", at => canvas.Write(Role.Now, "12", at.Moved(0, 1), Typeface.Strong, PlateFormat.NumberSize, Anchor.Middle, Ink.Accent));
         Row(middle, "work of this plate", at => Line(at, Pens.Present));
+        y += RowHeight;
+        Row(left, "middle of the sheet", at => Signs.Middle(canvas, at));
+        Row(middle, "take care", at => canvas.Write(Role.Text, "△", at.Moved(0, 1), Typeface.Text, PlateFormat.NameSize, Anchor.Middle));
         y += RowHeight;
         Row(left, "earlier work", at => Line(at, Pens.Earlier));
         Row(middle, "kept on the piece", at => Line(at, Pens.Standing(Making.Dash.Whole)));

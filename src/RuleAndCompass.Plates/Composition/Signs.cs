@@ -21,6 +21,13 @@ internal static class Signs
         canvas.Draw(Role.Now, Outline.Circle(at, RingRadius), Pens.Now);
     }
 
+    /// <summary>The middle of the sheet.</summary>
+    public static void Middle(Canvas canvas, Spot at)
+    {
+        canvas.Line(Role.Frame, at.Moved(-2.5, 0), at.Moved(2.5, 0), Pens.Earlier);
+        canvas.Line(Role.Frame, at.Moved(0, -2.5), at.Moved(0, 2.5), Pens.Earlier);
+    }
+
     /// <summary>A point that stands already.</summary>
     public static void Standing(Canvas canvas, Spot at, bool now) =>
         canvas.Fill(now ? Role.Present : Role.Earlier, Outline.Circle(at, 0.36), now ? Ink.Black : Ink.Grey);

@@ -16,6 +16,8 @@ internal sealed class StepDrawing
     private const double ProtractorRadius = 9;
     private const double TickInset = 4;
     private const double LongestName = 40;
+    private const double LongestUntied = 3.2;
+    private const double MostOutside = 12;
 
     private readonly Layout layout;
     private readonly Tracing tracing;
@@ -24,7 +26,7 @@ internal sealed class StepDrawing
     private readonly Dictionary<Point, int> actOfPoint;
     private readonly CancellationToken cancellation;
     private readonly LabelPlacement placement;
-    private readonly Dictionary<Mark, (string Text, Box Box)> names = new(ReferenceEqualityComparer.Instance);
+    private readonly Dictionary<Mark, (string Text, PlacedLabel Label)> names = new(ReferenceEqualityComparer.Instance);
 
     // Per act, the marks its sentence speaks of.
     private readonly int[] plateOfAct;
@@ -55,32 +57,81 @@ internal sealed class StepDrawing
 
     public void Draw(Canvas canvas, PlatePlan plan)
     {
-        canvas.Draw(Role.Frame, Outline.Around(view.OnPage(tracing.Sheet)), Pens.Frame);
-        if (tracing.Board is { } board && view.Window.Grown(10).Holds(view.OnPage(board)))
+        Edge(canvas, tracing.Sheet, Pens.Frame);
+        if (tracing.Board is { } board)
         {
-            canvas.Draw(Role.Frame, Outline.Around(view.OnPage(board)), Pens.Board);
+            Edge(canvas, board, Pens.Board);
         }
 
         int last = plan.End == 0 ? 0 : layout.Acts[plan.End - 1].Number;
+        Middle(canvas, plan);
         Strokes(canvas, plan, last, present: false);
         Strokes(canvas, plan, last, present: true);
         KeptWork(canvas, plan, last);
+        List<(Act Act, string Text, PlacedLabel Label)> numbers = [.. PlaceNumbers(plan)];
+        List<Mark> named = [.. MarksOn(plan).Where(names.ContainsKey)];
+
+        // A label that found no free place gets a little bare paper round it; all of that lies under the signs.
+        foreach (PlacedLabel label in numbers.Select(number => number.Label).Concat(named.Select(mark => names[mark].Label)))
+        {
+            if (label.IsCrowded)
+            {
+                canvas.Fill(Role.Frame, Outline.Around(label.Box.Grown(0.3)), Ink.Paper);
+            }
+        }
+
         Points(canvas, plan, last);
         for (int i = plan.First; i < plan.End; i++)
         {
             Sign(canvas, plan, layout.Acts[i]);
         }
 
-        for (int i = plan.First; i < plan.End; i++)
+        foreach ((Act act, string text, PlacedLabel label) in numbers)
         {
-            Number(canvas, plan, layout.Acts[i]);
+            if (act is Locate or Cross)
+            {
+                Leader(canvas, Role.Now, act.Makes!, label.Box, Pens.NowThin); // Both make a point.
+            }
+
+            canvas.Label(Role.Now, text, label.Box, Typeface.Strong, PlateFormat.NumberSize, Ink.Accent);
         }
 
-        foreach (Mark mark in MarksOn(plan))
+        foreach (Mark mark in named)
         {
-            if (names.TryGetValue(mark, out (string Text, Box Box) name))
+            (string text, PlacedLabel label) = names[mark];
+            Leader(canvas, Role.Name, mark, label.Box, Pens.Thin);
+            canvas.Label(Role.Name, text, label.Box, Typeface.Text, PlateFormat.NameSize, Ink.Black);
+        }
+    }
+
+    private void Edge(Canvas canvas, Box stock, Pen pen)
+    {
+        Box box = view.OnPage(stock);
+        if (view.Window.Holds(box))
+        {
+            canvas.Draw(Role.Frame, Outline.Around(box), pen);
+            return;
+        }
+
+        Spot[] corners = [new(box.Left, box.Top), new(box.Right, box.Top), new(box.Right, box.Bottom), new(box.Left, box.Bottom)];
+        for (int i = 0; i < corners.Length; i++)
+        {
+            if (Clipping.Line(corners[i], corners[(i + 1) % corners.Length], view.Window) is { } shown)
             {
-                canvas.Label(Role.Name, name.Text, name.Box, Typeface.Text, PlateFormat.NameSize, Ink.Black);
+                canvas.Line(Role.Frame, shown.From, shown.To, pen);
+            }
+        }
+    }
+
+    // Measures are taken from the middle of the sheet, so it is shown where a point is located.
+    private void Middle(Canvas canvas, PlatePlan plan)
+    {
+        for (int i = plan.First; i < plan.End; i++)
+        {
+            if (layout.Acts[i] is Locate)
+            {
+                Signs.Middle(canvas, view.Middle);
+                return;
             }
         }
     }
@@ -94,7 +145,7 @@ internal sealed class StepDrawing
                 break;
             }
 
-            if (layout.Acts[trace.Act - 1].Stage == plan.Stage == present)
+            if (plateOfAct[trace.Act] == plan.Index == present)
             {
                 foreach (Outline outline in view.Strokes(trace, Past))
                 {
@@ -255,9 +306,21 @@ internal sealed class StepDrawing
         return (Math.Atan2(-y, x), sweep);
     }
 
-    private void Number(Canvas canvas, PlatePlan plan, Act act)
+    private IEnumerable<(Act Act, string Text, PlacedLabel Label)> PlaceNumbers(PlatePlan plan)
     {
-        string text = act.Number.ToString(CultureInfo.InvariantCulture);
+        for (int i = plan.First; i < plan.End; i++)
+        {
+            Act act = layout.Acts[i];
+            string text = act.Number.ToString(CultureInfo.InvariantCulture);
+            if (PlaceNumber(plan, act, text) is { } label)
+            {
+                yield return (act, text, label);
+            }
+        }
+    }
+
+    private PlacedLabel? PlaceNumber(PlatePlan plan, Act act, string text)
+    {
         (double width, double height) = Canvas.LabelSize(text, Typeface.Strong, PlateFormat.NumberSize);
         IEnumerable<Box> places = act switch
         {
@@ -269,13 +332,28 @@ internal sealed class StepDrawing
         };
         if (!places.Any())
         {
+            return null;
+        }
+
+        PlacedLabel label = placement.Place(places, PlateSet.Only(plan.Index));
+        return view.Window.Grown(MostOutside).Holds(label.Box) ? label : null;
+    }
+
+    // A label that stands well off its point is tied to it.
+    private void Leader(Canvas canvas, Role role, Mark mark, Box box, Pen pen)
+    {
+        if (tracing[mark] is not PointTrace point)
+        {
             return;
         }
 
-        Box box = placement.Place(places, PlateSet.Only(plan.Index));
-        if (view.Window.Grown(12).Holds(box))
+        Spot at = view.OnPage(point.At);
+        Spot nearest = new(Math.Clamp(at.X, box.Left, box.Right), Math.Clamp(at.Y, box.Top, box.Bottom));
+        double distance = at.DistanceTo(nearest);
+        if (distance > LongestUntied)
         {
-            canvas.Label(Role.Now, text, box, Typeface.Strong, PlateFormat.NumberSize, Ink.Accent);
+            double part = (Signs.RingRadius + 0.2) / distance;
+            canvas.Line(role, new(at.X + (part * (nearest.X - at.X)), at.Y + (part * (nearest.Y - at.Y))), nearest, pen);
         }
     }
 
@@ -319,7 +397,7 @@ internal sealed class StepDrawing
             }
 
             (double x, double y) = Tracing.DirectionOf(line.Line);
-            foreach (double part in new[] { 0.62, 0.75, 0.5, 0.86, 0.38, 0.25, 0.95, 0.12 })
+            foreach (double part in new[] { 0.62, 0.75, 0.5, 0.86, 0.38, 0.25, 0.95, 0.12, 0.56, 0.69, 0.81, 0.44, 0.31, 0.19, 0.05 })
             {
                 Spot at = new(shown.From.X + (part * (shown.To.X - shown.From.X)), shown.From.Y + (part * (shown.To.Y - shown.From.Y)));
                 foreach (Box box in LabelPlacement.Beside(at, x, y, width, height, LineGap))

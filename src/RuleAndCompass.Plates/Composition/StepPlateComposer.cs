@@ -1,5 +1,4 @@
 using System.Collections.Immutable;
-using System.Diagnostics;
 using System.Globalization;
 using RuleAndCompass.Bench;
 using RuleAndCompass.Geometry;
@@ -19,6 +18,8 @@ internal sealed record PlatePlan(int Index, int Stage, int First, int End, Immut
 internal sealed class StepPlateComposer
 {
     private const double SmallestFactorOnA4 = 0.1;
+    private const double OverEdge = 3;
+    private const double RoomRoundUsed = 0.06;
 
     private readonly Layout layout;
     private readonly StepPlateOptions options;
@@ -47,19 +48,26 @@ internal sealed class StepPlateComposer
             }
         }
 
-        Box needed = NeededStock();
+        Box needed = NeededStock(tracing.Sheet);
+        Box used = UsedStock(needed);
         format = options.Paper == PlatePaper.A3 ? PlateFormat.A3 : PlateFormat.A4;
-        scale = ScaleOn(format, needed);
-        if (options.Paper is null && scale.Factor < SmallestFactorOnA4)
+        if (options.Paper is null && ScaleOn(format, needed).Factor < SmallestFactorOnA4)
         {
             format = PlateFormat.A3;
-            scale = ScaleOn(format, needed);
+        }
+
+        // The whole sheet, unless the part with work on it can be shown larger.
+        scale = ScaleOn(format, needed);
+        if (ScaleOn(format, used).Factor > scale.Factor)
+        {
+            scale = ScaleOn(format, used);
+            needed = used;
         }
 
         Box area = format.DrawingArea(stages.Length > 1);
         Spot middle = new(area.Middle.X - (needed.Middle.X * scale.Factor), area.Middle.Y - (needed.Middle.Y * scale.Factor));
         view = new(middle, scale.Factor, area);
-        Box shown = view.OnPage(needed).Grown(3);
+        Box shown = view.OnPage(needed).Grown(OverEdge);
         view = view with
         {
             Window = new(Math.Max(area.Left, shown.Left), Math.Max(area.Top, shown.Top), Math.Min(area.Right, shown.Right), Math.Min(area.Bottom, shown.Bottom)),
@@ -100,19 +108,65 @@ internal sealed class StepPlateComposer
     }
 
     // The sheet and every point, but not beyond the board; without a board not far beyond the sheet, so that a stray point does not shrink all the rest.
-    private Box NeededStock()
+    private Box NeededStock(Box needed)
     {
-        Box needed = tracing.Sheet;
-        Box limit = tracing.Board ?? needed.Grown(Math.Max(needed.Width, needed.Height) / 4);
+        Box near = needed.Grown(Math.Max(needed.Width, needed.Height) / 4);
+        Box limit = tracing.Board ?? near;
         foreach (Trace trace in tracing.Traces)
         {
-            if (trace is PointTrace point)
+            // A generated point far off is only aimed at.
+            if (trace is PointTrace point && (!point.Point.IsAuxiliary || near.Holds(point.At)))
             {
                 needed = needed.With(new Spot(Math.Clamp(point.At.X, limit.Left, limit.Right), Math.Clamp(point.At.Y, limit.Top, limit.Bottom)));
             }
         }
 
         return needed;
+    }
+
+    // The part of the needed stock that has work on it, with some room.
+    private Box UsedStock(Box needed)
+    {
+        Box? used = null;
+        foreach (Trace trace in tracing.Traces)
+        {
+            foreach (Spot spot in trace is PointTrace point ? [point.At] : ExtremesOf(trace))
+            {
+                Spot inside = new(Math.Clamp(spot.X, needed.Left, needed.Right), Math.Clamp(spot.Y, needed.Top, needed.Bottom));
+                used = used?.With(inside) ?? new Box(inside.X, inside.Y, inside.X, inside.Y);
+            }
+        }
+
+        if (used is not { } box)
+        {
+            return needed;
+        }
+
+        box = box.Grown(RoomRoundUsed * Math.Max(box.Width, box.Height));
+        return box.Width <= 0 ? needed : new(Math.Max(box.Left, needed.Left), Math.Max(box.Top, needed.Top), Math.Min(box.Right, needed.Right), Math.Min(box.Bottom, needed.Bottom));
+    }
+
+    private static IEnumerable<Spot> ExtremesOf(Trace trace)
+    {
+        switch (trace)
+        {
+            case LineTrace line:
+                yield return line.From;
+                yield return line.To;
+                break;
+            case CircleTrace circle:
+                foreach (ArcSpan arc in circle.Arcs)
+                {
+                    int steps = 1 + (int)(arc.Sweep / 0.2);
+                    for (int i = 0; i <= steps; i++)
+                    {
+                        double angle = arc.Start + (arc.Sweep * i / steps);
+                        yield return circle.Centre.Moved(circle.Radius * Math.Cos(angle), -circle.Radius * Math.Sin(angle));
+                    }
+                }
+
+                break;
+        }
     }
 
     private List<PlatePlan> Plan()
@@ -201,11 +255,11 @@ internal sealed class StepPlateComposer
     private List<string> TitleLines(int stage)
     {
         List<string> lines = layout.Stages.IsDefaultOrEmpty
-            ? Typesetting.Break(layout.Title, Typeface.Strong, PlateFormat.TitleSize, format.ColumnWidth)
-            : Typesetting.Break($"{layout.Stages[stage].Number}  {layout.Stages[stage].Title}", Typeface.Strong, PlateFormat.TitleSize, format.ColumnWidth);
+            ? Typesetting.Break(layout.Title, Typeface.Strong, PlateFormat.TitleSize, format.Measure)
+            : Typesetting.Break(layout.Stages[stage].Title, Typeface.Strong, PlateFormat.TitleSize, format.Measure);
         if (lines.Count > 3)
         {
-            lines = [lines[0], lines[1], Typesetting.Fit(string.Join(' ', lines.Skip(2)), Typeface.Strong, PlateFormat.TitleSize, format.ColumnWidth)];
+            lines = [lines[0], lines[1], Typesetting.Fit(string.Join(' ', lines.Skip(2)), Typeface.Strong, PlateFormat.TitleSize, format.Measure)];
         }
 
         return lines;
@@ -214,13 +268,19 @@ internal sealed class StepPlateComposer
     private double Header(Canvas canvas, PlatePlan plan)
     {
         double y = PlateFormat.Margin + 2.4;
-        canvas.Write(Role.Text, Typesetting.Fit(layout.Title, Typeface.Text, PlateFormat.NoteSize, format.ColumnWidth), new(format.ColumnLeft, y), Typeface.Text, PlateFormat.NoteSize, ink: Ink.Grey);
+        canvas.Write(Role.Text, Typesetting.Fit(layout.Title, Typeface.Text, PlateFormat.NoteSize, format.ColumnWidth), new(format.SentenceLeft, y), Typeface.Text, PlateFormat.NoteSize, ink: Ink.Grey);
         List<string> lines = TitleLines(plan.Stage);
         y = PlateFormat.Margin + 4;
         foreach (string line in lines)
         {
             y += PlateFormat.TitleLeading;
-            canvas.Write(Role.Text, line, new(format.ColumnLeft, y - 1), Typeface.Strong, PlateFormat.TitleSize);
+            canvas.Write(Role.Text, line, new(format.SentenceLeft, y - 1), Typeface.Strong, PlateFormat.TitleSize);
+        }
+
+        if (!layout.Stages.IsDefaultOrEmpty)
+        {
+            string number = Typesetting.Fit(layout.Stages[plan.Stage].Number, Typeface.Strong, PlateFormat.TitleSize, PlateFormat.NumberWidth * 2);
+            canvas.Write(Role.Text, number, new(format.SentenceLeft - 2.2, PlateFormat.Margin + 4 + PlateFormat.TitleLeading - 1), Typeface.Strong, PlateFormat.TitleSize, Anchor.Right);
         }
 
         double rule = y + 2;

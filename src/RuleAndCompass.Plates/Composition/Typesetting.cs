@@ -8,6 +8,8 @@ internal static class Typesetting
 {
     public const string Ellipsis = "…";
 
+    private const char NoBreak = '\u00A0';
+
     /// <summary>Lines no wider than the measure, broken at spaces; a word wider than that is broken anywhere.</summary>
     public static List<string> Break(string text, Typeface typeface, double sizeMillimetres, double measureMillimetres)
     {
@@ -16,8 +18,9 @@ internal static class Typesetting
         List<string> lines = [];
         string line = "";
         double width = 0;
-        foreach (string word in face.Shown(text).Split(' ', StringSplitOptions.RemoveEmptyEntries))
+        foreach (string kept in KeptTogether(face.Shown(text)).Split(' ', StringSplitOptions.RemoveEmptyEntries))
         {
+            string word = kept.Replace(NoBreak, ' ');
             double wordWidth = face.Width(word, sizeMillimetres);
             if (line.Length > 0 && width + space + wordWidth <= measureMillimetres)
             {
@@ -53,6 +56,28 @@ internal static class Typesetting
         }
 
         return lines;
+    }
+
+    // A name's index stays on one line: I[11 1/2].
+    private static string KeptTogether(string text)
+    {
+        if (!text.Contains('['))
+        {
+            return text;
+        }
+
+        char[] signs = text.ToCharArray();
+        int depth = 0;
+        for (int i = 0; i < signs.Length; i++)
+        {
+            depth = signs[i] == '[' ? depth + 1 : signs[i] == ']' ? Math.Max(0, depth - 1) : depth;
+            if (signs[i] == ' ' && depth > 0)
+            {
+                signs[i] = NoBreak;
+            }
+        }
+
+        return new string(signs);
     }
 
     /// <summary>The text, cut short with three dots where it is wider than the measure.</summary>

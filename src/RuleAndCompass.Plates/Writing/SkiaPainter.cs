@@ -9,15 +9,17 @@ namespace RuleAndCompass.Plates.Writing;
 /// <summary>Paints a page on a canvas whose unit is the millimetre.</summary>
 internal static class SkiaPainter
 {
-    // An arc of 1/32 turn as one cubic lies within 1e-10 of its radius of the true arc, far under a micrometre on the largest sheet.
-    private const double CubicRadians = 2 * Math.PI / 32;
+    // A quarter turn as one cubic leaves the circle by 2.7e-4 of the radius, and n cubics to the turn by (4/n)^6 of that: so many that it stays
+    // under 1e-5 mm, which is 32 on a circle of ten metres.
+    private const double QuarterError = 2.73e-4;
+    private const double LargestErrorMillimetres = 1e-5;
 
     public static void Paint(SKCanvas canvas, Page page, CancellationToken cancellation)
     {
         using SKPaint paint = new() { IsAntialias = true };
         Dictionary<(Typeface, double), SKFont> fonts = [];
-        SKPathBuilder? strokes = null;
-        Pen? pen = null;
+        SKPathBuilder? path = null;
+        Item? first = null;
         int painted = 0;
         foreach (Item item in page.Items)
         {
@@ -26,33 +28,21 @@ internal static class SkiaPainter
                 cancellation.ThrowIfCancellationRequested();
             }
 
-            // Neighbouring strokes of one pen leave as one path: a smaller file, sooner written.
-            if (item is Stroke stroke)
+            // Neighbours drawn alike leave as one path: a smaller file, sooner written.
+            if (first is not null && !Alike(first, item))
             {
-                if (strokes is not null && !Same(stroke.Pen, pen!)) // A pen is set whenever strokes are.
-                {
-                    Finish();
-                }
-
-                strokes ??= new SKPathBuilder();
-                pen = stroke.Pen;
-                Add(strokes, stroke.Outline);
-                continue;
+                Finish();
             }
 
-            Finish();
             switch (item)
             {
+                case Stroke stroke:
+                    Add(path ??= new SKPathBuilder(), stroke.Outline);
+                    first ??= item;
+                    break;
                 case Fill fill:
-                    using (SKPathBuilder builder = new())
-                    {
-                        Add(builder, fill.Outline);
-                        using SKPath path = builder.Detach();
-                        paint.Style = SKPaintStyle.Fill;
-                        paint.Color = Colour(fill.Ink);
-                        canvas.DrawPath(path, paint);
-                    }
-
+                    Add(path ??= new SKPathBuilder(), fill.Outline);
+                    first ??= item;
                     break;
                 case Words words:
                     Write(words);
@@ -70,23 +60,34 @@ internal static class SkiaPainter
 
         void Finish()
         {
-            if (strokes is null)
+            if (path is null)
             {
                 return;
             }
 
-            using SKPath path = strokes.Detach();
-            strokes.Dispose();
-            strokes = null;
-            using SKPathEffect? dashes = Dashes(pen!.Dashes); // Set with the strokes.
-            paint.Style = SKPaintStyle.Stroke;
-            paint.StrokeWidth = (float)pen.WidthMillimetres;
-            paint.StrokeCap = SKStrokeCap.Butt;
-            paint.StrokeJoin = SKStrokeJoin.Round;
-            paint.Color = Colour(pen.Ink);
-            paint.PathEffect = dashes;
-            canvas.DrawPath(path, paint);
-            paint.PathEffect = null;
+            using SKPath drawn = path.Detach();
+            path.Dispose();
+            path = null;
+            if (first is Stroke { Pen: var pen })
+            {
+                using SKPathEffect? dashes = Dashes(pen.Dashes);
+                paint.Style = SKPaintStyle.Stroke;
+                paint.StrokeWidth = (float)pen.WidthMillimetres;
+                paint.StrokeCap = SKStrokeCap.Butt;
+                paint.StrokeJoin = SKStrokeJoin.Round;
+                paint.Color = Colour(pen.Ink);
+                paint.PathEffect = dashes;
+                canvas.DrawPath(drawn, paint);
+                paint.PathEffect = null;
+            }
+            else if (first is Fill fill)
+            {
+                paint.Style = SKPaintStyle.Fill;
+                paint.Color = Colour(fill.Ink);
+                canvas.DrawPath(drawn, paint);
+            }
+
+            first = null;
         }
 
         void Write(Words words)
@@ -127,6 +128,13 @@ internal static class SkiaPainter
         Ink.Accent => new SKColor(0x98, 0x34, 0x22),
         Ink.Paper => SKColors.White,
         _ => throw new UnreachableException($"No colour for {ink}."),
+    };
+
+    private static bool Alike(Item a, Item b) => (a, b) switch
+    {
+        (Stroke first, Stroke second) => Same(first.Pen, second.Pen),
+        (Fill first, Fill second) => first.Ink == second.Ink,
+        _ => false,
     };
 
     private static bool Same(Pen a, Pen b) => ReferenceEquals(a, b) || (a.Ink == b.Ink && a.WidthMillimetres == b.WidthMillimetres && a.Dashes.SequenceEqual(b.Dashes));
@@ -173,7 +181,8 @@ internal static class SkiaPainter
             sweep -= 2 * Math.PI;
         }
 
-        int count = Math.Max(1, (int)Math.Ceiling((Math.Abs(sweep) / CubicRadians) - 1e-9));
+        double perTurn = Math.Max(4, 4 * Math.Pow(QuarterError * arc.RadiusMillimetres / LargestErrorMillimetres, 1.0 / 6));
+        int count = Math.Max(1, (int)Math.Ceiling((Math.Abs(sweep) / (2 * Math.PI) * perTurn) - 1e-9));
         double step = sweep / count;
         double handle = 4.0 / 3 * Math.Tan(step / 4) * arc.RadiusMillimetres;
         for (int i = 0; i < count; i++)
