@@ -1,4 +1,6 @@
+using System.Collections.Immutable;
 using System.CommandLine;
+using RuleAndCompass.Accuracy;
 using RuleAndCompass.CommandLine.Display;
 using RuleAndCompass.CommandLine.Files;
 using RuleAndCompass.Language.Diagnostics;
@@ -12,7 +14,7 @@ namespace RuleAndCompass.CommandLine;
 /// <param name="Layout">Null where the script is wrong.</param>
 /// <param name="Findings">Of all stages, in source order.</param>
 /// <param name="Status">The exit status so far.</param>
-internal sealed record ScriptRun(ScriptFile Script, Layout? Layout, IReadOnlyList<Diagnostic> Findings, int Status)
+internal sealed record ScriptRun(ScriptFile Script, Layout? Layout, ImmutableArray<Diagnostic> Findings, int Status)
 {
     /// <summary>Reads and makes a script.</summary>
     /// <exception cref="StopException">It can't be read, or an option can't.</exception>
@@ -22,7 +24,10 @@ internal sealed record ScriptRun(ScriptFile Script, Layout? Layout, IReadOnlyLis
         MakingOptions options = surroundings.Options.MakingOf(parsed, script);
         using ProgressLine progress = new(surroundings.Terminal, $"making {script.Name}", parsed.GetValue(surroundings.Options.Quiet));
         Outcome<Layout> made = Maker.Make(script.Name, script.Text, options, progress, surroundings.Cancellation);
-        return new(script, made.Value, made.Diagnostics, StatusOf(made, script, options));
+        ImmutableArray<Diagnostic> findings = made.Diagnostics;
+        if (made.Value is { } layout)
+            findings = [.. findings.Concat(LayoutFitness.Inspect(layout, surroundings.Cancellation)).OrderBy(finding => finding.Span.Start)];
+        return new(script, made.Value, findings, StatusOf(made, script, options));
     }
 
     /// <summary>Reads and makes the one script a command works on, and shows what was found.</summary>

@@ -1,6 +1,5 @@
 using System.CommandLine;
 using System.Text.Json;
-using RuleAndCompass.CommandLine.Display;
 using RuleAndCompass.CommandLine.Json;
 using RuleAndCompass.Language.Diagnostics;
 

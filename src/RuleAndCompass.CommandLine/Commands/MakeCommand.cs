@@ -1,12 +1,10 @@
 using System.CommandLine;
 using System.Diagnostics;
-using System.Text.Json;
 using RuleAndCompass.Accuracy;
 using RuleAndCompass.CommandLine.Display;
 using RuleAndCompass.CommandLine.Files;
 using RuleAndCompass.CommandLine.Json;
 using RuleAndCompass.Comparing;
-using RuleAndCompass.Making;
 using RuleAndCompass.Plates.Writing;
 
 namespace RuleAndCompass.CommandLine.Commands;

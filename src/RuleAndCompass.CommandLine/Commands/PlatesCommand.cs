@@ -1,8 +1,6 @@
 using System.CommandLine;
-using System.CommandLine.Completions;
 using RuleAndCompass.CommandLine.Display;
 using RuleAndCompass.CommandLine.Files;
-using RuleAndCompass.Making;
 
 namespace RuleAndCompass.CommandLine.Commands;
 

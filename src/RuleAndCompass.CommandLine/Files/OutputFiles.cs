@@ -1,5 +1,4 @@
 using System.Text;
-using RuleAndCompass.Language.Diagnostics;
 
 namespace RuleAndCompass.CommandLine.Files;
 

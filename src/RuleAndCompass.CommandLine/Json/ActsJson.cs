@@ -4,7 +4,6 @@ using System.Text.Json;
 using RuleAndCompass.Bench;
 using RuleAndCompass.Geometry;
 using RuleAndCompass.Making;
-using RuleAndCompass.Numbers;
 
 namespace RuleAndCompass.CommandLine.Json;
 
@@ -45,24 +44,48 @@ internal static class ActsJson
 
     private static void WriteAct(Utf8JsonWriter json, Act act, NumberJson numbers)
     {
-        (string name, Action write) = act switch
-        {
-            Locate locate => ("locate", () => WritePoint(json, "point", locate.Point.Point, numbers)),
-            Lay lay => ("lay", () => WriteLay(json, lay, numbers)),
-            SetOpening set => ("set", () => WriteOpening(json, set, numbers)),
-            Swing swing => ("swing", () => WriteSwing(json, swing, numbers)),
-            Cross cross => ("cross", () => WriteCross(json, cross, numbers)),
-            Protract protract => ("protract", () => WriteProtract(json, protract, numbers)),
-            Slide slide => ("slide", () => WriteSlide(json, slide, numbers)),
-            _ => throw new UnreachableException($"No JSON for {act.GetType().Name}."),
-        };
-        json.WriteString("act", name);
+        json.WriteString("act", NameOf(act));
         if (act.Makes is { } mark)
             json.WriteString("makes", mark.Name);
         else
             json.WriteNull("makes");
-        write();
+        switch (act)
+        {
+            case Locate locate:
+                WritePoint(json, "point", locate.Point.Point, numbers);
+                break;
+            case Lay lay:
+                WriteLay(json, lay, numbers);
+                break;
+            case SetOpening set:
+                WriteOpening(json, set, numbers);
+                break;
+            case Swing swing:
+                WriteSwing(json, swing, numbers);
+                break;
+            case Cross cross:
+                WriteCross(json, cross, numbers);
+                break;
+            case Protract protract:
+                WriteProtract(json, protract, numbers);
+                break;
+            case Slide slide:
+                WriteSlide(json, slide, numbers);
+                break;
+        }
     }
+
+    private static string NameOf(Act act) => act switch
+    {
+        Locate => "locate",
+        Lay => "lay",
+        SetOpening => "set",
+        Swing => "swing",
+        Cross => "cross",
+        Protract => "protract",
+        Slide => "slide",
+        _ => throw new UnreachableException($"No JSON for {act.GetType().Name}."),
+    };
 
     private static void WriteLay(Utf8JsonWriter json, Lay lay, NumberJson numbers)
     {
