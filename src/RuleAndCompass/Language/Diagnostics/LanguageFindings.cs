@@ -16,7 +16,8 @@ internal static class LanguageFindings
             "RC1001",
             $"no sentence begins with {Quote(found)}",
             span,
-            near is null
+            Vocabulary.LittleWords.Contains(found) ? "a line that begins with a little word goes on with the sentence before it, and there is none"
+            : near is null
                 ? "a sentence begins with a word such as `prick`, `rule`, `strike`, `keep`, `let` or `for`"
                 : $"did you mean `{near}`? For example `{SentenceForms.FindNearest(near, words)}`");
     }

@@ -16,7 +16,7 @@ internal static class Habits
         + "| halving: bisecting bisects bisector | touching: tangent | touches: tangents | meets: crosses cuts intersects | where: intersection | heavy: bold thick "
         + "| fine: thin light | dashed: dotted broken | clockwise: cw | anticlockwise: ccw counterclockwise | sideways: landscape | upright: portrait "
         + "| nearest: closest near | farthest: far | turned: rotated | toward: to | opposite: mirrored reflected | height: size | about: at | centre: middle "
-        + "| by: using | stepping: step | foot: projection | closed: close | ahead: beyond | behind: before");
+        + "| by: using | stepping: step | foot: projection | when: if | closed: close | ahead: beyond | behind: before");
 
     /// <summary>The sentence word for a first word that is none.</summary>
     public static string? FindFirstWord(string word) => FirstWords.GetValueOrDefault(word.ToLowerInvariant());
