@@ -12,7 +12,8 @@ namespace RuleAndCompass.CommandLine;
 /// </remarks>
 internal static partial class Reference
 {
-    public static string Text { get; } = Resource.Read(typeof(RecipeBook).Assembly, "language.md");
+    public static string Text { get; } =
+        Resource.Read(typeof(RecipeBook).Assembly, "language.md").TrimEnd() + "\n\n" + Resource.Read(typeof(Reference).Assembly, "command-line.md");
 
     /// <summary>What the reference says of a code or a word; null where that is nothing.</summary>
     public static string? Find(string what)
