@@ -45,9 +45,12 @@ internal readonly record struct PlateSet(int[]? Each, int From)
     }
 }
 
+/// <summary>A place for a label, and the spot it belongs to.</summary>
+internal readonly record struct LabelPlace(Box Box, Spot Anchor);
+
 /// <summary>Where a label stands.</summary>
 /// <param name="IsCrowded">No free place was found: it lies on something.</param>
-internal readonly record struct PlacedLabel(Box Box, bool IsCrowded);
+internal readonly record struct PlacedLabel(Box Box, Spot Anchor, bool IsCrowded);
 
 /// <summary>
 /// Finds free places for names and numbers: inside the drawing, on no line and on no other label. Only what shows on a plate together is kept apart, so a
@@ -141,13 +144,13 @@ internal sealed class LabelPlacement(Box window)
 
     /// <summary>Takes the first of the places that is free, else the one that covers least, and blocks it.</summary>
     /// <param name="places">Best first.</param>
-    public PlacedLabel Place(IEnumerable<Box> places, PlateSet plates)
+    public PlacedLabel Place(IEnumerable<LabelPlace> places, PlateSet plates)
     {
-        Box best = default;
+        LabelPlace best = default;
         double least = double.PositiveInfinity;
-        foreach (Box place in places)
+        foreach (LabelPlace place in places)
         {
-            double cost = Cost(place, plates, least);
+            double cost = Cost(place.Box, plates, least);
             if (cost < least)
             {
                 least = cost;
@@ -159,39 +162,41 @@ internal sealed class LabelPlacement(Box window)
             }
         }
 
-        Block(best, plates);
-        return new(best, least > 0);
+        Block(best.Box, plates);
+        return new(best.Box, best.Anchor, least > 0);
     }
 
     /// <summary>Places round a spot for a label of a size: beside it, then above and below, then in the corners, then further off.</summary>
-    public static IEnumerable<Box> Around(Spot spot, double width, double height, double gap)
+    public static IEnumerable<LabelPlace> Around(Spot spot, double width, double height, double gap)
     {
         foreach (double distance in new[] { gap, gap * 1.7, gap * 2.6, gap * 3.8, gap * 5.2, gap * 7 })
         {
             double half = height / 2, slant = distance * 0.7;
-            yield return Box.Of(spot.X + slant, spot.Y - slant - height, width, height);
-            yield return Box.Of(spot.X + distance, spot.Y - half, width, height);
-            yield return Box.Of(spot.X + slant, spot.Y + slant, width, height);
-            yield return Box.Of(spot.X - slant - width, spot.Y - slant - height, width, height);
-            yield return Box.Of(spot.X - distance - width, spot.Y - half, width, height);
-            yield return Box.Of(spot.X - slant - width, spot.Y + slant, width, height);
-            yield return Box.Of(spot.X - (width / 2), spot.Y - distance - height, width, height);
-            yield return Box.Of(spot.X - (width / 2), spot.Y + distance, width, height);
+            yield return At(spot.X + slant, spot.Y - slant - height);
+            yield return At(spot.X + distance, spot.Y - half);
+            yield return At(spot.X + slant, spot.Y + slant);
+            yield return At(spot.X - slant - width, spot.Y - slant - height);
+            yield return At(spot.X - distance - width, spot.Y - half);
+            yield return At(spot.X - slant - width, spot.Y + slant);
+            yield return At(spot.X - (width / 2), spot.Y - distance - height);
+            yield return At(spot.X - (width / 2), spot.Y + distance);
         }
+
+        LabelPlace At(double left, double top) => new(Box.Of(left, top, width, height), spot);
     }
 
-    /// <summary>Places beside a curve at a spot where it runs in a direction (of unit length): on either side, nearest first.</summary>
-    public static IEnumerable<Box> Beside(Spot spot, double directionX, double directionY, double width, double height, double gap)
+    /// <summary>Places beside a curve at a spot where it runs in a direction (of unit length): on either side, at some distances.</summary>
+    public static IEnumerable<LabelPlace> Beside(Spot spot, double directionX, double directionY, double width, double height, params double[] distances)
     {
-        foreach (double distance in new[] { gap, gap * 1.8, gap * 3 })
+        foreach (double distance in distances)
         {
             foreach (int side in new[] { 1, -1 })
             {
                 double x = side * directionY, y = -side * directionX;
 
                 // So far that the box clears the line whatever its slope.
-                double reach = distance + ((Math.Abs(x) * width) + (Math.Abs(y) * height)) / 2;
-                yield return Box.Of(spot.X + (x * reach) - (width / 2), spot.Y + (y * reach) - (height / 2), width, height);
+                double reach = distance + (((Math.Abs(x) * width) + (Math.Abs(y) * height)) / 2);
+                yield return new(Box.Of(spot.X + (x * reach) - (width / 2), spot.Y + (y * reach) - (height / 2), width, height), spot);
             }
         }
     }

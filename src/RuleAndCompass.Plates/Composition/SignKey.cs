@@ -14,7 +14,7 @@ internal static class SignKey
         canvas.Line(Role.Frame, new(left, top), new(format.ColumnRight, top), Pens.Rule);
         double y = top + 5;
         Row(left, "prick here", at => Signs.Prick(canvas, at));
-        Row(middle, "set the dividers so", at => Signs.Span(canvas, at.Moved(-4, 1.2), at.Moved(4, 1.2), 1));
+        Row(middle, "set the dividers so", at => Signs.Span(canvas, at.Moved(-4, 1.2), at.Moved(4, 1.2), 1, new Box(left, top, format.ColumnRight, format.TitleBlockTop)));
         y += RowHeight;
         Row(left, "seat the needle here", at => Signs.Needle(canvas, at.Moved(0, 2.4)));
         Row(middle, "lay the square here", at =>

@@ -55,13 +55,24 @@ internal static class Signs
         at.Moved(directionY * TickHalfLength, -directionX * TickHalfLength),
         Pens.NowHeavy);
 
-    /// <summary>The span between two points, beside the line that joins them, with its two feet; gives the middle of the bridge.</summary>
+    /// <summary>The span between two points, beside the line that joins them, with its two feet; what leaves the window is cut off.</summary>
     /// <param name="side">1 for the left as one goes from the first to the second, −1 for the right.</param>
-    public static Spot Span(Canvas canvas, Spot from, Spot to, int side)
+    public static void Span(Canvas canvas, Spot from, Spot to, int side, Box window)
     {
         (Spot first, Spot second) = SpanBridge(from, to, side);
-        canvas.Draw(Role.Now, Outline.Through(false, from, first, second, to), Pens.Now);
-        return new((first.X + second.X) / 2, (first.Y + second.Y) / 2);
+        if (window.Holds(first) && window.Holds(second))
+        {
+            canvas.Draw(Role.Now, Outline.Through(false, from, first, second, to), Pens.Now);
+            return;
+        }
+
+        foreach ((Spot a, Spot b) in new[] { (from, first), (first, second), (second, to) })
+        {
+            if (Clipping.Line(a, b, window) is { } shown)
+            {
+                canvas.Line(Role.Now, shown.From, shown.To, Pens.Now);
+            }
+        }
     }
 
     public static (Spot From, Spot To) SpanBridge(Spot from, Spot to, int side)

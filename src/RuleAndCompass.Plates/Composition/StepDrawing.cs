@@ -12,12 +12,17 @@ internal sealed class StepDrawing
 {
     private const double Past = 3;
     private const double LabelGap = 1.7;
-    private const double LineGap = 0.9;
+    private static readonly double[] nearLine = [0.9, 1.6, 2.7];
+    private static readonly double[] farFromLine = [5, 8];
     private const double ProtractorRadius = 9;
     private const double TickInset = 4;
     private const double LongestName = 40;
     private const double LongestUntied = 3.2;
     private const double MostOutside = 12;
+
+    private static readonly double[] partsOfLine = [0.62, 0.75, 0.5, 0.86, 0.38, 0.25, 0.95, 0.12, 0.56, 0.69, 0.81, 0.44, 0.31, 0.19, 0.05];
+    private static readonly double[] partsOfCircle = [0.125, 0.375, 0.625, 0.875, 0.06, 0.19, 0.31, 0.44, 0.56, 0.69, 0.81, 0.94];
+    private static readonly double[] partsOfArc = [0.9, 0.1, 0.5, 0.7, 0.3];
 
     private readonly Layout layout;
     private readonly Tracing tracing;
@@ -88,18 +93,14 @@ internal sealed class StepDrawing
 
         foreach ((Act act, string text, PlacedLabel label) in numbers)
         {
-            if (act is Locate or Cross)
-            {
-                Leader(canvas, Role.Now, act.Makes!, label.Box, Pens.NowThin); // Both make a point.
-            }
-
+            Leader(canvas, Role.Now, act.Makes is PointMark, label, Pens.NowThin);
             canvas.Label(Role.Now, text, label.Box, Typeface.Strong, PlateFormat.NumberSize, Ink.Accent);
         }
 
         foreach (Mark mark in named)
         {
             (string text, PlacedLabel label) = names[mark];
-            Leader(canvas, Role.Name, mark, label.Box, Pens.Thin);
+            Leader(canvas, Role.Name, mark is PointMark, label, Pens.Thin);
             canvas.Label(Role.Name, text, label.Box, Typeface.Text, PlateFormat.NameSize, Ink.Black);
         }
     }
@@ -238,7 +239,7 @@ internal sealed class StepDrawing
             case SetOpening set:
                 if (SpanOf(plan, set) is { } span)
                 {
-                    Signs.Span(canvas, span.From, span.To, 1);
+                    Signs.Span(canvas, span.From, span.To, 1, view.Window.Grown(MostOutside / 2));
                 }
 
                 break;
@@ -299,9 +300,20 @@ internal sealed class StepDrawing
         return null;
     }
 
-    private static (double Start, double Sweep) AngleOf(Protract protract)
+    // The angle is shown on the side to which more of the line is drawn.
+    private (double Start, double Sweep) AngleOf(Protract protract)
     {
         (double x, double y) = Tracing.DirectionOf(protract.Base);
+        (double lineX, double lineY) = Tracing.DirectionOf(protract.Line);
+        LineTrace line = (LineTrace)tracing[protract.Line];
+        Spot at = Tracing.SpotOf(protract.At.Point);
+        double ahead = ((line.To.X - at.X) * lineX) + ((line.To.Y - at.Y) * lineY);
+        double behind = ((at.X - line.From.X) * lineX) + ((at.Y - line.From.Y) * lineY);
+        if (behind > ahead)
+        {
+            (x, y) = (-x, -y);
+        }
+
         double sweep = protract.By.ToDegreesDouble() * Math.PI / 180 % (2 * Math.PI);
         return (Math.Atan2(-y, x), sweep);
     }
@@ -322,7 +334,7 @@ internal sealed class StepDrawing
     private PlacedLabel? PlaceNumber(PlatePlan plan, Act act, string text)
     {
         (double width, double height) = Canvas.LabelSize(text, Typeface.Strong, PlateFormat.NumberSize);
-        IEnumerable<Box> places = act switch
+        IEnumerable<LabelPlace> places = act switch
         {
             Locate or Cross => LabelPlacement.Around(SpotOf(act.Makes!), width, height, LabelGap), // Both make a point.
             Swing swing => BesideCurve(tracing[swing.Circle], width, height),
@@ -339,39 +351,34 @@ internal sealed class StepDrawing
         return view.Window.Grown(MostOutside).Holds(label.Box) ? label : null;
     }
 
-    // A label that stands well off its point is tied to it.
-    private void Leader(Canvas canvas, Role role, Mark mark, Box box, Pen pen)
+    // A label that stands well off what it belongs to is tied to it.
+    private static void Leader(Canvas canvas, Role role, bool isPoint, PlacedLabel label, Pen pen)
     {
-        if (tracing[mark] is not PointTrace point)
-        {
-            return;
-        }
-
-        Spot at = view.OnPage(point.At);
-        Spot nearest = new(Math.Clamp(at.X, box.Left, box.Right), Math.Clamp(at.Y, box.Top, box.Bottom));
+        Spot at = label.Anchor;
+        Spot nearest = new(Math.Clamp(at.X, label.Box.Left, label.Box.Right), Math.Clamp(at.Y, label.Box.Top, label.Box.Bottom));
         double distance = at.DistanceTo(nearest);
         if (distance > LongestUntied)
         {
-            double part = (Signs.RingRadius + 0.2) / distance;
+            double part = isPoint ? (Signs.RingRadius + 0.2) / distance : 0;
             canvas.Line(role, new(at.X + (part * (nearest.X - at.X)), at.Y + (part * (nearest.Y - at.Y))), nearest, pen);
         }
     }
 
-    private static IEnumerable<Box> BesideSpan(Spot from, Spot to, double width, double height)
+    private static IEnumerable<LabelPlace> BesideSpan(Spot from, Spot to, double width, double height)
     {
         (Spot first, Spot second) = Signs.SpanBridge(from, to, 1);
         double length = first.DistanceTo(second);
         double x = length == 0 ? 1 : (second.X - first.X) / length, y = length == 0 ? 0 : (second.Y - first.Y) / length;
         foreach (double part in new[] { 0.5, 0.35, 0.65, 0.2, 0.8 })
         {
-            foreach (Box box in LabelPlacement.Beside(first.Moved(part * length * x, part * length * y), x, y, width, height, LineGap))
+            foreach (LabelPlace place in LabelPlacement.Beside(first.Moved(part * length * x, part * length * y), x, y, width, height, nearLine))
             {
-                yield return box;
+                yield return place;
             }
         }
     }
 
-    private IEnumerable<Box> AroundAngle(Protract protract, double width, double height)
+    private IEnumerable<LabelPlace> AroundAngle(Protract protract, double width, double height)
     {
         (double start, double sweep) = AngleOf(protract);
         Spot at = SpotOf(protract.At);
@@ -381,13 +388,27 @@ internal sealed class StepDrawing
             {
                 double angle = start + (sweep * part);
                 Spot middle = at.Moved(radius * Math.Cos(angle), -radius * Math.Sin(angle));
-                yield return Box.Of(middle.X - (width / 2), middle.Y - (height / 2), width, height);
+                yield return new(Box.Of(middle.X - (width / 2), middle.Y - (height / 2), width, height), middle);
             }
         }
     }
 
     // Along the strokes of a curve, a little towards its far end first: there fewest other lines run together.
-    private IEnumerable<Box> BesideCurve(Trace trace, double width, double height)
+    private IEnumerable<LabelPlace> BesideCurve(Trace trace, double width, double height)
+    {
+        foreach (double[] distances in new[] { nearLine, farFromLine })
+        {
+            foreach ((Spot at, double x, double y) in SpotsAlong(trace))
+            {
+                foreach (LabelPlace place in LabelPlacement.Beside(at, x, y, width, height, distances))
+                {
+                    yield return place;
+                }
+            }
+        }
+    }
+
+    private IEnumerable<(Spot At, double X, double Y)> SpotsAlong(Trace trace)
     {
         if (trace is LineTrace line)
         {
@@ -397,13 +418,9 @@ internal sealed class StepDrawing
             }
 
             (double x, double y) = Tracing.DirectionOf(line.Line);
-            foreach (double part in new[] { 0.62, 0.75, 0.5, 0.86, 0.38, 0.25, 0.95, 0.12, 0.56, 0.69, 0.81, 0.44, 0.31, 0.19, 0.05 })
+            foreach (double part in partsOfLine)
             {
-                Spot at = new(shown.From.X + (part * (shown.To.X - shown.From.X)), shown.From.Y + (part * (shown.To.Y - shown.From.Y)));
-                foreach (Box box in LabelPlacement.Beside(at, x, y, width, height, LineGap))
-                {
-                    yield return box;
-                }
+                yield return (new(shown.From.X + (part * (shown.To.X - shown.From.X)), shown.From.Y + (part * (shown.To.Y - shown.From.Y))), x, y);
             }
         }
         else if (trace is CircleTrace circle)
@@ -412,15 +429,10 @@ internal sealed class StepDrawing
             double radius = circle.Radius * view.Scale;
             foreach (ArcSpan arc in view.Arcs(circle, Past))
             {
-                double[] parts = arc.IsWhole ? [0.125, 0.375, 0.625, 0.875, 0.06, 0.19, 0.31, 0.44, 0.56, 0.69, 0.81, 0.94] : [0.9, 0.1, 0.5, 0.7, 0.3];
-                foreach (double part in parts)
+                foreach (double part in arc.IsWhole ? partsOfCircle : partsOfArc)
                 {
                     double angle = arc.Start + (part * arc.Sweep);
-                    Spot at = centre.Moved(radius * Math.Cos(angle), -radius * Math.Sin(angle));
-                    foreach (Box box in LabelPlacement.Beside(at, -Math.Sin(angle), -Math.Cos(angle), width, height, LineGap))
-                    {
-                        yield return box;
-                    }
+                    yield return (centre.Moved(radius * Math.Cos(angle), -radius * Math.Sin(angle)), -Math.Sin(angle), -Math.Cos(angle));
                 }
             }
         }
@@ -513,7 +525,7 @@ internal sealed class StepDrawing
     {
         string text = Typesetting.Fit(trace.Mark.Name, Typeface.Text, PlateFormat.NameSize, LongestName);
         (double width, double height) = Canvas.LabelSize(text, Typeface.Text, PlateFormat.NameSize);
-        IEnumerable<Box> places;
+        IEnumerable<LabelPlace> places;
         if (trace is PointTrace point)
         {
             Spot at = view.OnPage(point.At);

@@ -19,6 +19,7 @@ internal sealed class StepPlateComposer
 {
     private const double SmallestFactorOnA4 = 0.1;
     private const double OverEdge = 3;
+    private const int MostMoved = 5;
     private const double RoomRoundUsed = 0.06;
 
     private readonly Layout layout;
@@ -49,6 +50,7 @@ internal sealed class StepPlateComposer
         }
 
         Box needed = NeededStock(tracing.Sheet);
+        Box whole = needed;
         Box used = UsedStock(needed);
         format = options.Paper == PlatePaper.A3 ? PlateFormat.A3 : PlateFormat.A4;
         if (options.Paper is null && ScaleOn(format, needed).Factor < SmallestFactorOnA4)
@@ -65,9 +67,13 @@ internal sealed class StepPlateComposer
         }
 
         Box area = format.DrawingArea(stages.Length > 1);
-        Spot middle = new(area.Middle.X - (needed.Middle.X * scale.Factor), area.Middle.Y - (needed.Middle.Y * scale.Factor));
+
+        // The used part in the middle, but as much of the sheet round it as there is room for.
+        double centreX = whole.Width * scale.Factor <= area.Width ? whole.Middle.X : needed.Middle.X;
+        double centreY = whole.Height * scale.Factor <= area.Height ? whole.Middle.Y : needed.Middle.Y;
+        Spot middle = new(area.Middle.X - (centreX * scale.Factor), area.Middle.Y - (centreY * scale.Factor));
         view = new(middle, scale.Factor, area);
-        Box shown = view.OnPage(needed).Grown(OverEdge);
+        Box shown = view.OnPage(whole).Grown(OverEdge);
         view = view with
         {
             Window = new(Math.Max(area.Left, shown.Left), Math.Max(area.Top, shown.Top), Math.Min(area.Right, shown.Right), Math.Min(area.Bottom, shown.Bottom)),
@@ -213,8 +219,23 @@ internal sealed class StepPlateComposer
             }
             else if (block.Height > room)
             {
-                Finish(at);
-                room = Room(false, stage);
+                // The acts of one sentence stay together where that moves few of them.
+                int moved = 0;
+                while (moved < MostMoved && moved < blocks.Count - 1 && at - moved - 1 >= first && layout.Acts[at - moved - 1].Want == layout.Acts[at].Want)
+                {
+                    moved++;
+                }
+
+                if (moved == MostMoved || moved >= at - first)
+                {
+                    moved = 0;
+                }
+
+                List<SentenceBlock> taken = blocks.GetRange(blocks.Count - moved, moved);
+                blocks.RemoveRange(blocks.Count - moved, moved);
+                Finish(at - moved);
+                room = Room(false, stage) - taken.Sum(earlier => earlier.Height);
+                blocks.AddRange(taken);
             }
 
             room -= block.Height;

@@ -91,10 +91,8 @@ internal sealed class Workbench(Kit kit, Decider decider, IReadOnlySet<string> u
         if (Standing(line) is { } standing)
             return from.IsReversed ? standing.Reversed() : standing;
         LineMark made = new(name ?? Generate('l'), line, name is null);
-        double degrees = by.ToDegreesDouble();
-        string size = Math.Abs(degrees).ToString("0.##", CultureInfo.InvariantCulture);
-        string way = degrees < 0 ? "clockwise" : "anticlockwise";
-        string says = $"Lay the protractor to {from.Mark.Name} at {at.Name}, mark {size}° {way}, and draw {made.Name}.";
+        string way = by.ToDegreesDouble() < 0 ? "clockwise" : "anticlockwise";
+        string says = $"Lay the protractor to {from.Mark.Name} at {at.Name}, mark {ValueText.Set(by)} {way}, and draw {made.Name}.";
         return new(Done(made, new Protract(Next(), stage, want, made, from.Mark, at, by, says, span, file)), from.IsReversed);
     }
 

@@ -42,7 +42,7 @@ internal sealed partial class Constructions
         Need(by, ByTool.Square, Kit.Square);
         Need(by, ByTool.Dividers, HasDividers);
         if (Kit.Square && by is null or ByTool.Square)
-            return bench.Slide(bench.Slide(along, through, null), through, name).Reversed();
+            return ParallelBySquare(along, through, name);
         if (HasDividers && Kit.HasStraightedge)
             return ParallelByRhombus(along, through, name);
         throw NoTool("a parallel", "`square`, or `straightedge` and `dividers`");
@@ -127,6 +127,15 @@ internal sealed partial class Constructions
 
     /// <summary>The one crossing of two lines that are not parallel.</summary>
     public PointMark Crossed(DirectedLine a, DirectedLine b, string? name = null) => bench.Cross(a.Mark, b.Mark, Crossing.Of(a.Mark.Line, b.Mark.Line, Decider).Points[0], 0, name);
+
+    // From a line that stands square to it already, one slide; else two.
+    private DirectedLine ParallelBySquare(DirectedLine along, PointMark through, string? name)
+    {
+        if (bench.Marks.FindParallel(along.Direction.QuarterTurn) is not { } plumb)
+            return bench.Slide(bench.Slide(along, through, null), through, name).Reversed();
+        DirectedLine slid = bench.Slide(new(plumb, false), through, name);
+        return Decider.Sign(Vector.Dot(slid.Direction, along.Direction)) > 0 ? slid : slid.Reversed();
+    }
 
     private static Point Middle(Point a, Point b) => new((a.X + b.X) / 2, (a.Y + b.Y) / 2);
 
