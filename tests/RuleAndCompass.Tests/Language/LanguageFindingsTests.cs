@@ -45,8 +45,9 @@ public sealed class LanguageFindingsTests
             start.ShouldBeGreaterThan(0, $"{code} is not explained");
             int end = findings.IndexOf("\n### ", start + 1, StringComparison.Ordinal);
             string entry = findings[start..(end < 0 ? findings.Length : end)];
-            entry.ShouldContain("```", customMessage: $"{code} has no example");
-            entry.Length.ShouldBeGreaterThan(120, $"{code} is hardly explained");
+            string[] parts = entry.Split("```");
+            parts.Length.ShouldBe(3, $"{code} has no example, or several");
+            parts.ShouldAllBe(part => !string.IsNullOrWhiteSpace(part), $"{code} lacks its meaning, its example or how to mend it");
         }
     }
 

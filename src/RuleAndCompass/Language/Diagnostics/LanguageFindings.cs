@@ -352,7 +352,7 @@ internal static class LanguageFindings
 
     internal static Diagnostic TooManyFindings(int limit, SourceSpan span) => Error(
         "RC1095",
-        $"more than {Figure(limit)} findings, which is the limit; the rest is not told",
+        $"more than {Figure(limit)} findings, which is the limit; the rest of the script is not read",
         span,
         "mend these first");
 

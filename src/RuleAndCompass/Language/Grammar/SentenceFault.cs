@@ -6,6 +6,9 @@ namespace RuleAndCompass.Language.Grammar;
 /// <summary>Says why a sentence could not be read, from the farthest place that reading came to and what was expected there.</summary>
 internal static class SentenceFault
 {
+    // a sentence may be as long as a script: for the sake of a message, no more is looked at
+    private const int FarthestLook = 100;
+
     /// <summary>The one finding for a sentence whose shape is wrong.</summary>
     /// <param name="stream">After the failed reading.</param>
     /// <param name="sentenceWord">The word it begins with, for the example in the hint; empty for an expression alone.</param>
@@ -51,7 +54,7 @@ internal static class SentenceFault
 
     private static IEnumerable<string> Words(TokenStream stream)
     {
-        for (int i = 1; i < stream.Count; i++)
+        for (int i = 1; i < Math.Min(stream.Count, FarthestLook); i++)
         {
             if (stream[i].Kind == TokenKind.Word)
                 yield return stream[i].Text;
@@ -86,7 +89,7 @@ internal static class SentenceFault
     {
         string close = open.Text == "(" ? ")" : "]";
         int depth = 0;
-        for (int i = at; i < stream.Count; i++)
+        for (int i = at; i < Math.Min(stream.Count, at + FarthestLook); i++)
         {
             Token token = stream[i];
             if (token.IsSign("(") || token.IsSign("["))
@@ -102,7 +105,7 @@ internal static class SentenceFault
     private static bool ReadsOnAsName(TokenStream stream, int at, string sentenceWord)
     {
         List<Token> tokens = [];
-        for (int i = 0; i < stream.Count; i++)
+        for (int i = 0; i < Math.Min(stream.Count, at + FarthestLook); i++)
             tokens.Add(i == at ? stream[i] with { Text = "A" } : stream[i]);
         TokenStream trial = new(stream.Text, tokens, 0, tokens.Count, stream.Limits);
         bool read = sentenceWord.Length > 0
