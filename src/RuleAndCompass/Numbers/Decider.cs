@@ -218,6 +218,14 @@ public sealed class Decider
         }
     }
 
+    /// <summary>Whether <paramref name="x"/> is zero, by the field alone, whatever its enclosures say.</summary>
+    internal bool IsExactlyZero(Real x, out Verdict verdict)
+    {
+        bool? isZero = DecideZero(x, out Verdict? known);
+        verdict = known ?? Verdict.Proved;
+        return isZero == true;
+    }
+
     // The sign, or 0 for the rational 0, where the enclosure at hand tells it.
     private static int? SignOfEnclosure(Real x)
     {
