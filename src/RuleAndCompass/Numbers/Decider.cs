@@ -256,7 +256,10 @@ public sealed class Decider
 
         StraightLine? line = StraightLine.Compile(x, Specific);
         if (line is null)
-            return null;
+        {
+            verdict = CyclotomicField.TryVanishing(x, random, limit);
+            return verdict is null ? null : true;
+        }
 
         try
         {

@@ -51,17 +51,22 @@ internal sealed class PrimeField
         while (true)
         {
             ulong candidate = random.NextWord() >> 3 | 1UL << (PrimeBits - 1) | 3;
-            bool divided = false;
-            foreach (ulong small in smallPrimes)
-            {
-                if (candidate % small == 0)
-                {
-                    divided = true;
-                    break;
-                }
-            }
+            if (!MayBePrime(candidate))
+                continue;
+            var field = new PrimeField(candidate);
+            if (field.IsPrime())
+                return field;
+        }
+    }
 
-            if (divided)
+    /// <summary>The field of a random prime of at most 61 bits that is −1 modulo <paramref name="order"/>, a multiple of 4.</summary>
+    public static PrimeField DrawBelowMultiple(ulong order, SeededBits random)
+    {
+        ulong most = (1UL << PrimeBits) / order;
+        while (true)
+        {
+            ulong candidate = (1 + random.NextWord() % most) * order - 1;
+            if (candidate >> (PrimeBits - 3) == 0 || !MayBePrime(candidate))
                 continue;
             var field = new PrimeField(candidate);
             if (field.IsPrime())
@@ -100,6 +105,9 @@ internal sealed class PrimeField
             Difference(Product(x.A, y.A), Product(x.B, y.B)),
             Sum(Product(x.A, y.B), Product(x.B, y.A)));
     }
+
+    /// <summary>a + b i from two elements of the smaller field.</summary>
+    public static Residue Join(Residue real, Residue imaginary) => new(real.A, imaginary.A);
 
     /// <summary>False for 0.</summary>
     public bool TryInvert(Residue x, out Residue result)
@@ -151,6 +159,17 @@ internal sealed class PrimeField
         return true;
     }
 
+    private static bool MayBePrime(ulong candidate)
+    {
+        foreach (ulong small in smallPrimes)
+        {
+            if (candidate % small == 0)
+                return candidate == small;
+        }
+
+        return true;
+    }
+
     private ulong Sum(ulong x, ulong y)
     {
         ulong sum = x + y;
@@ -169,6 +188,19 @@ internal sealed class PrimeField
         // The low halves add up to 0 modulo 2^64, with a carry where they are not both 0.
         ulong result = high + carry + (low != 0 ? 1UL : 0UL);
         return result >= prime ? result - prime : result;
+    }
+
+    public Residue Power(Residue x, ulong exponent)
+    {
+        Residue result = One;
+        for (int bit = 63 - BitOperations.LeadingZeroCount(exponent); bit >= 0; bit--)
+        {
+            result = Multiply(result, result);
+            if ((exponent >> bit & 1) != 0)
+                result = Multiply(result, x);
+        }
+
+        return result;
     }
 
     private ulong Power(ulong x, ulong exponent)
