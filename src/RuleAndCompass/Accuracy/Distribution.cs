@@ -2,13 +2,13 @@ namespace RuleAndCompass.Accuracy;
 
 /// <summary>
 /// The distribution of one quantity's error over any number of trials in a bounded space of 20 kilobytes: counts in classes whose width is
-/// a 64th of the size or less (below a 500th of the typical error, one class to zero), for each sign. Percentiles are interpolated in
-/// their class, which puts them within some parts in ten thousand of those of the sorted list.
+/// a 128th of the size or less (below a 500th of the typical error, one class to zero), for each sign. Percentiles are interpolated in
+/// their class, which puts them within a part in a thousand of those of the sorted list: less than the chance of even a million trials.
 /// </summary>
 /// <param name="typical">The size of the typical error; any positive number near it will do.</param>
 internal sealed class Distribution(double typical)
 {
-    private const int ClassBits = 6;
+    private const int ClassBits = 7;
     private const int OctavesBelow = 9;
     private const int OctavesAbove = 12;
     private const int Classes = (OctavesBelow + OctavesAbove) << ClassBits;

@@ -1,3 +1,4 @@
+using System.Diagnostics;
 using System.Globalization;
 using RuleAndCompass.Geometry;
 using RuleAndCompass.Language.Diagnostics;
@@ -112,7 +113,8 @@ internal sealed class Workbench(Kit kit, Decider decider, IReadOnlySet<string> u
             SpanOpening between => $"Set the {tool} to the span from {between.First.Name} to {between.Second.Name} ({millimetres} mm).",
             ScaleOpening { Setting: { } setting } => $"Set the {tool} to {setting} mm by the scale.",
             ScaleOpening => $"Set the {tool} to {millimetres} mm, taken off the full-size plate.",
-            _ => $"Set the {tool} to about {millimetres} mm; any opening near it will do.",
+            FreeOpening free => $"Set the {tool} to about {ValueText.Plain(free.Chosen)} mm; any opening near it will do.",
+            _ => throw new UnreachableException($"No words for {opening.GetType().Name}."),
         };
         SetOpening set = new(Next(), stage, want, opening, beam, says, span, file);
         acts.Add(set);
