@@ -73,7 +73,7 @@ public sealed class WantTests
                 ("prick P[0 to 3] stepping O to A along back from A toward O", "P[1] = O and distance A to P[3] = 3 * distance A to O"),
                 ("prick P[0] on c toward right\nprick Q[0 to 3] stepping 20 mm round c from P[0] clockwise", "distance Q[2] to Q[3] = 20 mm and Q[3] on c and y of Q[1] < 0"),
                 ("rule t through B, A", "B on t and A on t"),
-                ("rule t through B toward left", "B on t and angle from t to l anticlockwise > 0°"),
+                ("rule t through B toward left", "B on t and angle from t to l anticlockwise < -90°"),
                 ("rule t through B toward 45°\nrule u through O toward right", "angle from u to t anticlockwise = 45°"),
                 ("rule t through B toward C", "t = m"),
                 ("rule t through B square to l", "t square to l and B on t and angle from l to t anticlockwise = 90°"),
@@ -93,7 +93,7 @@ public sealed class WantTests
                 ("prick P on c toward down\nrule t touching c at P", "t touches c and P on t and angle from t to l anticlockwise < 90°"),
                 ("rule t touching c from A, above O", "t touches c and A on t"),
                 ("rule t touching c, d open, left along l", "t touches c and t touches d"),
-                ("rule t touching c, d crossed, left along l", "t touches c and t touches d"),
+                ("rule t touching c, d crossed, nearest A", "t touches c and t touches d"),
                 ("rule t touching c, e open, right of O", "t touches c and t touches e"),
                 ("strike k about A through B", "B on k and radius of k = distance A to B"),
                 ("strike k about A opening 17 mm", "radius of k = 17 mm"),
@@ -130,7 +130,7 @@ public sealed class WantTests
     [Fact]
     public void Tools_not_in_the_kit_are_not_used()
     {
-        foreach ((string want, string _) in Wants.Select(row => row.Data))
+        foreach (string want in Wants.Select(row => (string)row[0]))
         {
             Layout bare = Layouts.Make($"kit straightedge 2 m, dividers 1 mm to 500 mm, scale 1/2 mm\n{Figures}{want}");
             bare.Acts.ShouldNotContain(act => act is Slide || act is Protract, want);
