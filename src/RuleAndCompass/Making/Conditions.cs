@@ -1,5 +1,6 @@
 using System.Diagnostics;
 using System.Globalization;
+using RuleAndCompass.Bench;
 using RuleAndCompass.Geometry;
 using RuleAndCompass.Language.Syntax;
 using RuleAndCompass.Numbers;

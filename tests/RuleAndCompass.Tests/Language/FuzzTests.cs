@@ -43,10 +43,10 @@ public sealed class FuzzTests
         }));
 
     [Fact]
-    public void Token_soup_is_survived() => Soups.Sample(Check, iter: 20_000, threads: 1);
+    public void Token_soup_is_survived() => Soups.Sample(Check, iter: 10_000, threads: 1);
 
     [Fact]
-    public void Sentences_of_random_words_are_survived() => SentenceSoups.Sample(Check, iter: 20_000, threads: 1);
+    public void Sentences_of_random_words_are_survived() => SentenceSoups.Sample(Check, iter: 10_000, threads: 1);
 
     [Fact]
     public void Damaged_scripts_are_survived() => Mutants.Sample(Check, iter: 3_000, threads: 1);

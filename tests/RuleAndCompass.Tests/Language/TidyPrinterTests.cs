@@ -33,7 +33,7 @@ public sealed class TidyPrinterTests
             Shape.Of(again.Value!.Sentences).ShouldBe(Shape.Of(script.Sentences), printed);
             TidyPrinter.Print(again.Value).ShouldBe(printed);
         },
-        iter: 1_000,
+        iter: 300,
         threads: 1);
 
     [Fact]

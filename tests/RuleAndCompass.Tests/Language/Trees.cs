@@ -3,14 +3,13 @@ using CsCheck;
 using RuleAndCompass.Language.Diagnostics;
 using RuleAndCompass.Language.Grammar;
 using RuleAndCompass.Language.Syntax;
-using RuleAndCompass.Numbers;
 
 namespace RuleAndCompass.Tests.Language;
 
 /// <summary>Makes trees of every sort at random, such as reading can give.</summary>
 internal static class Trees
 {
-    private static readonly SourceSpan Nowhere;
+    private static SourceSpan Nowhere => default;
 
     /// <summary>One of the values, each as likely.</summary>
     public static Gen<T> Pick<T>(params T[] values) => Gen.Int[0, values.Length - 1].Select(i => values[i]);

@@ -13,6 +13,7 @@ public sealed class DiagnosticRenderer
     private const string Margin = "    ";
     private const int WidestLine = 110;
     private const int BeforePlace = 40;
+    private const int FarthestLook = 1_000;
 
     private readonly string _name;
     private readonly string? _text;
@@ -48,7 +49,7 @@ public sealed class DiagnosticRenderer
 
     private bool AppendPlace(StringBuilder report, SourceSpan span)
     {
-        SourceSpan whole = _lines!.LineSpan(_lines.Find(span.Start).Line); // there are lines where there is text
+        SourceSpan whole = Around(_lines!.LineSpan(_lines.Find(span.Start).Line), span.Start); // there are lines where there is text
         string line = _text!.Substring(whole.Start, whole.Length);
         if (string.IsNullOrWhiteSpace(line))
             return false;
@@ -65,8 +66,8 @@ public sealed class DiagnosticRenderer
         bool cutBefore = Width(cells, begin, cells.Count) > WidestLine && Width(cells, begin, first) > BeforePlace;
         if (cutBefore)
         {
-            while (Width(cells, begin, first) > BeforePlace)
-                begin++;
+            for (int before = Width(cells, begin, first); before > BeforePlace; begin++)
+                before -= cells[begin].Width;
         }
 
         int end = begin;
@@ -86,6 +87,20 @@ public sealed class DiagnosticRenderer
         report.Append('\n').Append(Margin).Append(' ', (cutBefore ? 1 : 0) + Width(cells, begin, first));
         report.Append('‾', Math.Max(1, Width(cells, first, last))).Append('\n');
         return true;
+    }
+
+    // Of a line far longer than is shown, the part near a place; never from the middle of a surrogate pair.
+    private SourceSpan Around(SourceSpan line, int place)
+    {
+        if (line.Length <= 2 * FarthestLook)
+            return line;
+        int start = Math.Max(line.Start, place - FarthestLook);
+        int end = Math.Min(line.End, place + FarthestLook);
+        if (start > line.Start && char.IsLowSurrogate(_text![start]))
+            start++;
+        if (end < line.End && char.IsLowSurrogate(_text![end]))
+            end++;
+        return new SourceSpan(start, end - start);
     }
 
     private static void TrimEnd(StringBuilder report)
@@ -131,7 +146,7 @@ public sealed class DiagnosticRenderer
 
     // The blocks that Unicode Standard Annex 11 gives wide or fullwidth in the main: East Asian scripts and pictures (ranges from memory).
     private static bool IsWide(int value) => value is (>= 0x1100 and <= 0x115F) or (>= 0x2E80 and <= 0x303E) or (>= 0x3041 and <= 0xA4CF) or (>= 0xAC00 and <= 0xD7A3)
-        or (>= 0xF900 and <= 0xFAFF) or (>= 0xFE30 and <= 0xFE6F) or (>= 0xFF01 and <= 0xFF60) or (>= 0xFFE0 and <= 0xFFE6) or (>= 0x1F300 and <= 0x1FAFF) or (>= 0x20000 and <= 0x3FFFD);
+        or (>= 0xF900 and <= 0xFAFF) or (>= 0xFE30 and <= 0xFE6F) or (>= 0xFF01 and <= 0xFF60) or (>= 0xFFE0 and <= 0xFFE6) or (>= 0x1F300 and <= 0x1F6FF) or (>= 0x1F900 and <= 0x1FAFF) or (>= 0x20000 and <= 0x3FFFD);
 
     private readonly record struct Cell(int Start, int End, string Shown, int Width);
 }

@@ -1,0 +1,39 @@
+using RuleAndCompass.Plates.Fonts;
+using RuleAndCompass.Plates.Scene;
+
+namespace RuleAndCompass.Plates.Composition;
+
+/// <summary>A page in the making.</summary>
+internal sealed class Canvas
+{
+    private readonly List<Item> items = [];
+
+    public void Add(Item item) => items.Add(item);
+
+    public void Line(Role role, Spot from, Spot to, Pen pen) => items.Add(new Stroke(role, Outline.Line(from, to), pen));
+
+    public void Draw(Role role, Outline outline, Pen pen) => items.Add(new Stroke(role, outline, pen));
+
+    public void Fill(Role role, Outline outline, Ink ink) => items.Add(new Fill(role, outline, ink));
+
+    public void Write(Role role, string text, Spot at, Typeface typeface, double size, Anchor anchor = Anchor.Left, Ink ink = Ink.Black)
+    {
+        if (text.Length > 0)
+        {
+            items.Add(new Words(role, text, at, typeface, size, anchor, 0, ink));
+        }
+    }
+
+    /// <summary>A label whose capitals fill the height of a box made by <see cref="LabelSize"/>.</summary>
+    public void Label(Role role, string text, Box box, Typeface typeface, double size, Ink ink) =>
+        Write(role, text, new Spot(box.Left, box.Bottom - LabelDescent(size)), typeface, size, Anchor.Left, ink);
+
+    /// <summary>The box a label needs: from its descenders to its capitals.</summary>
+    public static (double Width, double Height) LabelSize(string text, Typeface typeface, double size) =>
+        (Typesetting.Width(text, typeface, size), (size * Face.CapitalHeight) + LabelDescent(size));
+
+    public Page Finish(double width, double height, string title) => new(width, height, title, [.. items]);
+
+    // Brackets and the tails of letters reach a little under the base line.
+    private static double LabelDescent(double size) => size * 0.14;
+}

@@ -1,0 +1,275 @@
+using RuleAndCompass.Plates.Scene;
+
+namespace RuleAndCompass.Plates.Composition;
+
+/// <summary>The plates, by their index, on which something shows: each of them, or all from the first on.</summary>
+internal readonly record struct PlateSet(int[]? Each, int From)
+{
+    public static PlateSet AllFrom(int plate) => new(null, plate);
+
+    public static PlateSet Only(int plate) => new([plate], plate);
+
+    /// <param name="ascending">In ascending order, at least one.</param>
+    public static PlateSet Of(List<int> ascending) => new([.. ascending], ascending[0]);
+
+    public bool Meets(PlateSet other)
+    {
+        if (Each is null)
+        {
+            return other.Each is null || other.Each[^1] >= From;
+        }
+
+        if (other.Each is null)
+        {
+            return Each[^1] >= other.From;
+        }
+
+        for (int i = 0, j = 0; i < Each.Length && j < other.Each.Length;)
+        {
+            if (Each[i] == other.Each[j])
+            {
+                return true;
+            }
+
+            if (Each[i] < other.Each[j])
+            {
+                i++;
+            }
+            else
+            {
+                j++;
+            }
+        }
+
+        return false;
+    }
+}
+
+/// <summary>A place for a label, and the spot it belongs to.</summary>
+internal readonly record struct LabelPlace(Box Box, Spot Anchor);
+
+/// <summary>Where a label stands.</summary>
+/// <param name="IsCrowded">No free place was found: it lies on something.</param>
+internal readonly record struct PlacedLabel(Box Box, Spot Anchor, bool IsCrowded);
+
+/// <summary>
+/// Finds free places for names and numbers: inside the drawing, on no line and on no other label. Only what shows on a plate together is kept apart, so a
+/// name can have one place from plate to plate.
+/// </summary>
+internal sealed class LabelPlacement(Box window)
+{
+    private const double SmallestCellMillimetres = 4;
+    private const double CellsAcross = 500;
+    private const double LineCost = 10;
+    private const double LabelCost = 200;
+    private const double OutsideCost = 2000;
+
+    private readonly double cellMillimetres = Math.Max(SmallestCellMillimetres, Math.Max(window.Width, window.Height) / CellsAcross);
+    private readonly Dictionary<(int X, int Y), List<int>> cells = [];
+    private readonly List<Obstacle> obstacles = [];
+    private int[] seen = [];
+    private int asked;
+
+    private readonly record struct Obstacle(Spot From, Spot To, Box Box, bool IsLine, PlateSet Plates);
+
+    /// <summary>Keeps labels off a straight line.</summary>
+    public void Block(Spot from, Spot to, PlateSet plates)
+    {
+        if (Clipping.Line(from, to, window) is not { } inside)
+        {
+            return;
+        }
+
+        int number = Add(new(inside.From, inside.To, default, true, plates));
+        int steps = 1 + (int)(inside.From.DistanceTo(inside.To) / (cellMillimetres / 4));
+        (int, int) last = (int.MinValue, 0);
+        for (int i = 0; i <= steps; i++)
+        {
+            double part = (double)i / steps;
+            Spot at = inside.From.Moved(part * (inside.To.X - inside.From.X), part * (inside.To.Y - inside.From.Y));
+            if (Cell(at) is var cell && cell != last)
+            {
+                Enter(cell, number);
+                last = cell;
+            }
+        }
+    }
+
+    /// <summary>Keeps labels off the strokes of an outline.</summary>
+    public void Block(Outline outline, PlateSet plates)
+    {
+        Spot at = outline.Start;
+        foreach (Leg leg in outline.Legs)
+        {
+            if (leg is ArcLeg arc)
+            {
+                double start = Tracing.AngleOf(arc.Centre, at), end = Tracing.AngleOf(arc.Centre, arc.To);
+                double sweep = arc.Clockwise ? start - end : end - start;
+                sweep = sweep <= 0 ? sweep + (2 * Math.PI) : sweep;
+                int chords = Math.Clamp((int)Math.Ceiling(sweep * arc.RadiusMillimetres / SmallestCellMillimetres), 4, 2000);
+                for (int i = 1; i <= chords; i++)
+                {
+                    double angle = start + ((arc.Clockwise ? -sweep : sweep) * i / chords);
+                    Spot to = arc.Centre.Moved(arc.RadiusMillimetres * Math.Cos(angle), -arc.RadiusMillimetres * Math.Sin(angle));
+                    Block(at, to, plates);
+                    at = to;
+                }
+            }
+            else
+            {
+                Block(at, leg.To, plates);
+            }
+
+            at = leg.To;
+        }
+
+        if (outline.Closed)
+        {
+            Block(at, outline.Start, plates);
+        }
+    }
+
+    /// <summary>Keeps labels off a box: a sign, or another label.</summary>
+    public void Block(Box box, PlateSet plates)
+    {
+        int number = Add(new(default, default, box, false, plates));
+        foreach ((int X, int Y) cell in CellsOf(box))
+        {
+            Enter(cell, number);
+        }
+    }
+
+    /// <summary>Whether nothing that is blocked touches the box.</summary>
+    public bool IsFree(Box box) => Cost(box, PlateSet.AllFrom(0), double.Epsilon) == 0;
+
+    /// <summary>Takes the first of the places that is free, else the one that covers least, and blocks it.</summary>
+    /// <param name="places">Best first.</param>
+    public PlacedLabel Place(IEnumerable<LabelPlace> places, PlateSet plates)
+    {
+        LabelPlace best = default;
+        double least = double.PositiveInfinity;
+        foreach (LabelPlace place in places)
+        {
+            double cost = Cost(place.Box, plates, least);
+            if (cost < least)
+            {
+                least = cost;
+                best = place;
+                if (cost == 0)
+                {
+                    break;
+                }
+            }
+        }
+
+        Block(best.Box, plates);
+        return new(best.Box, best.Anchor, least > 0);
+    }
+
+    /// <summary>Places round a spot for a label of a size: beside it, then above and below, then in the corners, then further off.</summary>
+    public static IEnumerable<LabelPlace> Around(Spot spot, double width, double height, double gap)
+    {
+        foreach (double distance in new[] { gap, gap * 1.7, gap * 2.6, gap * 3.8, gap * 5.2, gap * 7 })
+        {
+            double half = height / 2, slant = distance * 0.7;
+            yield return At(spot.X + slant, spot.Y - slant - height);
+            yield return At(spot.X + distance, spot.Y - half);
+            yield return At(spot.X + slant, spot.Y + slant);
+            yield return At(spot.X - slant - width, spot.Y - slant - height);
+            yield return At(spot.X - distance - width, spot.Y - half);
+            yield return At(spot.X - slant - width, spot.Y + slant);
+            yield return At(spot.X - (width / 2), spot.Y - distance - height);
+            yield return At(spot.X - (width / 2), spot.Y + distance);
+        }
+
+        LabelPlace At(double left, double top) => new(Box.Of(left, top, width, height), spot);
+    }
+
+    /// <summary>Places beside a curve at a spot where it runs in a direction (of unit length): on either side, at some distances.</summary>
+    public static IEnumerable<LabelPlace> Beside(Spot spot, double directionX, double directionY, double width, double height, params double[] distances)
+    {
+        foreach (double distance in distances)
+        {
+            foreach (int side in new[] { 1, -1 })
+            {
+                double x = side * directionY, y = -side * directionX;
+
+                // So far that the box clears the line whatever its slope.
+                double reach = distance + (((Math.Abs(x) * width) + (Math.Abs(y) * height)) / 2);
+                yield return new(Box.Of(spot.X + (x * reach) - (width / 2), spot.Y + (y * reach) - (height / 2), width, height), spot);
+            }
+        }
+    }
+
+    private double Cost(Box box, PlateSet plates, double giveUpAt)
+    {
+        double cost = window.Holds(box) ? 0 : OutsideCost;
+        if (seen.Length < obstacles.Count)
+        {
+            Array.Resize(ref seen, Math.Max(64, obstacles.Count * 2));
+        }
+
+        asked++;
+        foreach ((int X, int Y) cell in CellsOf(box))
+        {
+            if (!cells.TryGetValue(cell, out List<int>? here))
+            {
+                continue;
+            }
+
+            foreach (int number in here)
+            {
+                if (cost >= giveUpAt)
+                {
+                    return cost;
+                }
+
+                if (seen[number] == asked)
+                {
+                    continue;
+                }
+
+                seen[number] = asked;
+                Obstacle obstacle = obstacles[number];
+                bool touches = obstacle.IsLine ? Clipping.Line(obstacle.From, obstacle.To, box) is not null : obstacle.Box.Overlaps(box);
+                if (touches && obstacle.Plates.Meets(plates))
+                {
+                    cost += obstacle.IsLine ? LineCost : LabelCost;
+                }
+            }
+        }
+
+        return cost;
+    }
+
+    private int Add(Obstacle obstacle)
+    {
+        obstacles.Add(obstacle);
+        return obstacles.Count - 1;
+    }
+
+    private void Enter((int X, int Y) cell, int number)
+    {
+        if (!cells.TryGetValue(cell, out List<int>? here))
+        {
+            cells.Add(cell, here = []);
+        }
+
+        here.Add(number);
+    }
+
+    private (int X, int Y) Cell(Spot spot) => ((int)Math.Floor(spot.X / cellMillimetres), (int)Math.Floor(spot.Y / cellMillimetres));
+
+    private IEnumerable<(int X, int Y)> CellsOf(Box box)
+    {
+        (int left, int top) = Cell(new(box.Left, box.Top));
+        (int right, int bottom) = Cell(new(box.Right, box.Bottom));
+        for (int x = left; x <= right; x++)
+        {
+            for (int y = top; y <= bottom; y++)
+            {
+                yield return (x, y);
+            }
+        }
+    }
+}
