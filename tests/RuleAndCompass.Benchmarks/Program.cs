@@ -1,7 +1,10 @@
+using RuleAndCompass.Benchmarks.Accuracy;
 using RuleAndCompass.Benchmarks.Exact;
 
 if (args.Length > 0 && args[0] == "exact")
     return ExactBenchmark.Run(args.AsSpan(1));
+if (args.Length > 0 && args[0] == "hand")
+    return HandErrorBenchmark.Run(args.AsSpan(1));
 
-Console.Error.WriteLine("usage: exact WORKLOAD [SIZE]");
+Console.Error.WriteLine("usage: exact WORKLOAD [SIZE] | hand trials SCRIPT [COUNT] | hand first-order [ACTS]");
 return 2;
