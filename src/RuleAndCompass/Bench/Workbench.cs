@@ -54,12 +54,14 @@ internal sealed class Workbench(Kit kit, Decider decider, IReadOnlySet<string> u
         file = inFile;
     }
 
-    public PointMark Locate(Point at, string? name, string says)
+    /// <summary>Pricks a measured point.</summary>
+    /// <param name="from">The mark it is measured from; null for the middle of the sheet.</param>
+    public PointMark Locate(Point at, string? name, string says, PointMark? from = null)
     {
         if (index.Find(at) is { } standing)
             return standing;
         PointMark made = new(name ?? Generate('p'), at, name is null);
-        return Done(made, new Locate(Next(), stage, want, made, kit.ScaleStep is not null, says.Replace("{}", made.Name, StringComparison.Ordinal), span, file));
+        return Done(made, new Locate(Next(), stage, want, made, kit.ScaleStep is not null, says.Replace("{}", made.Name, StringComparison.Ordinal), span, file) { From = from });
     }
 
     /// <summary>The line from one mark to another, which the caller has decided to be two points.</summary>

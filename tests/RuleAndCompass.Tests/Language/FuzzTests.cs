@@ -81,10 +81,10 @@ public sealed class FuzzTests
     [InlineData("not ")]
     [InlineData("title \"{")]
     [InlineData("1 1/1 ")]
-    public void The_same_again_a_hundred_thousand_times_is_survived(string piece)
+    public void The_same_again_thirty_thousand_times_is_survived(string piece)
     {
-        Check(string.Concat(Enumerable.Repeat(piece, 100_000)));
-        Check("let a = " + string.Concat(Enumerable.Repeat(piece, 100_000)));
+        Check(string.Concat(Enumerable.Repeat(piece, 30_000)));
+        Check("let a = " + string.Concat(Enumerable.Repeat(piece, 30_000)));
     }
 
     [Fact]

@@ -190,6 +190,49 @@ public sealed class ScriptReaderTests
     }
 
     [Theory]
+    [InlineData("kit divders 2 mm to 3 mm,\nprick O at (0, 0)", "RC1002", "prick O at (0, 0)")]
+    [InlineData("kit square,\nprick O at (0, 0)", "RC1006", "prick O at (0, 0)")]
+    [InlineData("kit square; protractor,\nprick O at (0, 0)", "RC1013", "prick O at (0, 0)")]
+    [InlineData("kti square,\nprick O at (0, 0)", "RC1001", "prick O at (0, 0)")]
+    [InlineData("hand edj 0.1 mm,\nprick 0.1 mm\nkeep O", "RC1002", "keep O")]
+    public void A_comma_after_a_fault_does_not_take_the_next_sentence_with_it(string text, string code, string kept)
+    {
+        Outcome<Script> outcome = ScriptReader.Read("comma", text);
+
+        outcome.Diagnostics.ShouldHaveSingleItem().Code.ShouldBe(code);
+        outcome.Value!.Sentences.ShouldHaveSingleItem().ToString().ShouldBe(kept);
+    }
+
+    [Fact]
+    public void A_line_that_begins_with_a_sentence_word_may_go_on_with_the_line_before() =>
+        ScriptReader.Read("hand", "hand edge 0.1 mm,\nprick 0.1 mm").Value!.Sentences.ShouldHaveSingleItem().ToString().ShouldBe("hand edge 0.1 mm, prick 0.1 mm");
+
+    [Theory]
+    [InlineData("")]
+    [InlineData("keep a,\n")]
+    [InlineData("let a = (,\n")]
+    [InlineData("foo a,\nprick b,\n")]
+    [InlineData("keep $,\n")]
+    [InlineData("prick at at,\n")]
+    [InlineData("needs a,\n")]
+    [InlineData("a = b and\n")]
+    [InlineData("when a = b\n")]
+    [InlineData("recipe \"x\"\n")]
+    [InlineData("end ")]
+    [InlineData("\"\" ")]
+    [InlineData("title \"{a}\" ")]
+    [InlineData("1 ")]
+    [InlineData("° ")]
+    public void A_script_of_the_greatest_size_takes_no_longer_than_its_size(string piece)
+    {
+        string text = piece.Length == 0 ? "" : string.Concat(Enumerable.Repeat(piece, (4 << 20) / piece.Length));
+        using CancellationTokenSource late = new(TimeSpan.FromSeconds(60));
+
+        // a reader whose time grew with the square of the size would take hours
+        Should.NotThrow(() => ScriptReader.Read("great", text, null, late.Token));
+    }
+
+    [Theory]
     [InlineData("", "")]
     [InlineData("\uFEFF# only a comment\n\n", "")]
     [InlineData("\uFEFFtitle \"x\"", "title \"x\"")]

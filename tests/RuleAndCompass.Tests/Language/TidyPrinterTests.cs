@@ -33,7 +33,7 @@ public sealed class TidyPrinterTests
             Shape.Of(again.Value!.Sentences).ShouldBe(Shape.Of(script.Sentences), printed);
             TidyPrinter.Print(again.Value).ShouldBe(printed);
         },
-        iter: 300,
+        iter: 150,
         threads: 1);
 
     [Fact]
@@ -45,7 +45,7 @@ public sealed class TidyPrinterTests
             again.Diagnostics.ShouldBeEmpty(printed);
             Shape.Of(again.Value!).ShouldBe(Shape.Of(expression), printed);
         },
-        iter: 10_000,
+        iter: 4_000,
         threads: 1);
 
     [Fact]

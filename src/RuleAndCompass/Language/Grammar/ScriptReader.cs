@@ -25,20 +25,8 @@ public static class ScriptReader
 
         (List<Token> tokens, List<Comment> comments, List<Diagnostic> findings) = Lexer.Read(text, limits, cancellation);
         BlockBuilder blocks = new(text, limits, findings);
-        int sentences = 0;
-        for (int start = 0; start < tokens.Count;)
-        {
-            cancellation.ThrowIfCancellationRequested();
-            if (++sentences > limits.MaximumSentences)
-            {
-                findings.Add(LanguageFindings.TooManySentences(limits.MaximumSentences, tokens[start].Span));
-                break;
-            }
-
-            int end = SentenceEnd(tokens, start);
-            start = ReadSentence(text, tokens, start, end, limits, findings, blocks);
-        }
-
+        SentenceReader reader = new(text, tokens, limits, findings, blocks);
+        reader.ReadAll(cancellation);
         ImmutableArray<Sentence> tree = blocks.Finish();
         Script script = new(name, text, tree) { Comments = [.. comments], UnreadNames = blocks.UnreadNames };
         return new Outcome<Script>(script, InOrder(findings, limits));
@@ -61,71 +49,6 @@ public static class ScriptReader
             findings.Add(SentenceFault.Explain(stream, "", new SourceSpan(0, text.Length)));
         return new Outcome<Expression>(findings.Count == 0 ? result.Value : null, InOrder(findings, limits));
     }
-
-    // A line that ends in a comma, or whose next begins with a little word, goes on there.
-    private static int SentenceEnd(List<Token> tokens, int start)
-    {
-        int end = start + 1;
-        while (end < tokens.Count
-            && (!tokens[end].FirstOnLine || tokens[end - 1].IsSign(",") || (tokens[end].Kind == TokenKind.Word && Vocabulary.LittleWords.Contains(tokens[end].Text))))
-            end++;
-        return end;
-    }
-
-    /// <summary>Reads the sentence, hands it to the blocks, and returns where the next begins.</summary>
-    private static int ReadSentence(string text, List<Token> tokens, int start, int end, ReadingLimits limits, List<Diagnostic> findings, BlockBuilder blocks)
-    {
-        Token first = tokens[start];
-        if (tokens.FindIndex(start, end - start, token => token.Kind == TokenKind.Fault) >= 0)
-        {
-            // a comma at the end of a faulty line must not take the next sentence with it
-            int next = tokens.FindIndex(start + 1, end - start - 1, token => token.FirstOnLine && SentenceForms.Begins(token.Text));
-            end = next < 0 ? end : next;
-            blocks.AddBad(Meant(first), first, UnreadName.Find(tokens, start, end, Meant(first)));
-            return end;
-        }
-
-        if (first.Kind != TokenKind.Word || !SentenceForms.Begins(first.Text))
-        {
-            string written = text.Substring(first.Span.Start, first.Span.Length);
-            findings.Add(LanguageFindings.UnknownSentenceWord(written, tokens.GetRange(start, end - start).Select(token => token.Text), first.Span));
-            blocks.AddBad(Meant(first), first, UnreadName.Find(tokens, start, end, Meant(first)));
-            return end;
-        }
-
-        TokenStream stream = new(text, tokens, start, end - start, limits);
-        IResult<Sentence> result = SentenceGrammar.Sentence(stream.Input(0));
-        if (result.WasSuccessful)
-        {
-            findings.AddRange(stream.Findings);
-            findings.AddRange(stream.Doubts);
-            if (stream.Findings.Count == 0 && stream.Doubts.Count == 0)
-                blocks.Add(result.Value, first);
-            else
-                blocks.AddBad(first.Text, first, UnreadName.Find(tokens, start, end, first.Text));
-            return end;
-        }
-
-        findings.AddRange(stream.Findings);
-        if (!stream.LimitMet)
-        {
-            Diagnostic finding = SentenceFault.Explain(stream, first.Text, first.Span);
-            if (!stream.Findings.Any(other => other.Span == finding.Span))
-                findings.Add(finding);
-            Token found = stream[stream.Farthest];
-            if (stream.Farthest > 0 && found.FirstOnLine && SentenceForms.Begins(found.Text))
-                end = start + stream.Farthest;
-        }
-
-        blocks.AddBad(first.Text, first, UnreadName.Find(tokens, start, end, first.Text));
-        return end;
-    }
-
-    // The sentence word that was meant, so that a mistyped `for` still takes its `end`.
-    private static string Meant(Token first) =>
-        first.Kind != TokenKind.Word ? ""
-        : SentenceForms.Begins(first.Text) ? first.Text
-        : NearName.Find(first.Text, SentenceForms.Words) ?? "";
 
     private static ImmutableArray<Diagnostic> InOrder(List<Diagnostic> findings, ReadingLimits limits)
     {
