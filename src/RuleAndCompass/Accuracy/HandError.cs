@@ -46,8 +46,9 @@ public static class HandError
         {
             cancellation.ThrowIfCancellationRequested();
             figures.Add(subject.Quantity, new Figures(subject.Quantity, sweeps.Of(subject.Quantity, addToWhole: subject.Of == HandSubject.Comparison)));
-            foreach (Quantity end in subject.Far)
-                figures.Add(end, new Figures(end, sweeps.Of(end, addToWhole: false)));
+            IEnumerable<Quantity> others = subject.Minutes is { } minutes ? subject.Far.Add(minutes) : subject.Far;
+            foreach (Quantity other in others)
+                figures.Add(other, new Figures(other, sweeps.Of(other, addToWhole: false)));
         }
 
         RunTrials(program, [.. figures.Values], options, findings, progress, cancellation);
@@ -124,7 +125,7 @@ public static class HandError
             size,
             trials?.SizePercentile(0.99),
             far,
-            subject.RatePerHour is { } rate ? Math.Abs(size.GetValueOrDefault() / rate) * 60 : null,
+            subject.Minutes is { } minutes ? figures[minutes].Size95 : subject.RatePerHour is { } rate ? size / Math.Abs(rate) * 60 : null,
             figure.Trials?.Lost ?? 0,
             trials is null ? null : Disagreement(figure, trials, subject.Kind),
             blame,

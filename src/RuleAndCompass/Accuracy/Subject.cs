@@ -15,7 +15,11 @@ internal sealed record Subject(
     /// <summary>Millimetres at the far end for each unit of the quantity; null where the far end has quantities of its own, or there is none.</summary>
     public double? FarFactor { get; init; }
 
+    /// <summary>Units of the quantity an hour, where timed.</summary>
     public double? RatePerHour { get; init; }
+
+    /// <summary>For a timed place: its error along the path, in minutes of time.</summary>
+    public Quantity? Minutes { get; init; }
 
     /// <summary>Comparisons in their order, then what is kept.</summary>
     public static IEnumerable<Subject> All(Layout layout, ActProgram program)
@@ -34,6 +38,7 @@ internal sealed record Subject(
             {
                 FarFactor = comparison.FarEnd is { } far && comparison.Kind == QuantityKind.Angle ? double.DegreesToRadians(far) : null,
                 RatePerHour = comparison.RatePerHour,
+                Minutes = comparison is { PathRate: { } rate, MeasureY: { } y } ? AlongPath(measure, y, rate, program, exact) : null,
             };
         }
 
@@ -43,6 +48,19 @@ internal sealed record Subject(
             foreach (Subject subject in Kept(layout.Kept[index], index, program, exact, marks))
                 yield return subject;
         }
+    }
+
+    // The part of (x, y) along the path, by its speed: (x vx + y vy) / v², in hours.
+    private static Quantity AlongPath(Measure x, Measure y, (double X, double Y) rate, ActProgram program, Vector256<double>[] exact)
+    {
+        double perMinute = 60 / (rate.X * rate.X + rate.Y * rate.Y);
+        FunctionMeasure minutes = new(
+            "+",
+            [
+                new FunctionMeasure("*", [x, new ConstantMeasure(rate.X * perMinute)]),
+                new FunctionMeasure("*", [y, new ConstantMeasure(rate.Y * perMinute)]),
+            ]);
+        return new Quantity(Gauge.Compile(minutes, program), exact, false);
     }
 
     private static IEnumerable<Subject> Kept(Kept kept, int index, ActProgram program, Vector256<double>[] exact, Lazy<Dictionary<Point, PointMark>> marks)

@@ -84,6 +84,21 @@ public sealed class HandErrorTests
     }
 
     [Fact]
+    public void Minutes_of_time_of_a_place_count_the_part_along_its_path()
+    {
+        ActSequence acts = new();
+        acts.ComparePlace(acts.Locate(30, 40));
+        Layout layout = acts.Layout(Hand.Ordinary);
+        layout = layout with { Comparisons = [layout.Comparisons[0] with { RatePerHour = 25, PathRate = (15, -20) }] };
+
+        HandResult result = HandError.Assess(layout, new HandErrorOptions { Trials = 0 }).Value!.Results[0];
+
+        // Prick and scale give each coordinate √(0.01 + 0.04), and so along any path; 25 mm go an hour.
+        result.MinutesOfTime95!.Value.ShouldBe(1.959964 * Math.Sqrt(0.05) / 25 * 60, 1e-6);
+        result.Size95!.Value.ShouldBe(2.447747 * Math.Sqrt(0.05), 1e-5);
+    }
+
+    [Fact]
     public void A_report_tells_of_each_kept_thing()
     {
         HandErrorReport report = HandError.Assess(SomeOfEach().Layout(Hand.Ordinary)).Value!;
