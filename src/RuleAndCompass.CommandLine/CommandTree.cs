@@ -21,6 +21,8 @@ internal static class CommandTree
         {
             if (args.Length == 0)
                 throw new StopException(CommandLineFindings.BadArguments("it needs a command", "`setout --help` lists them; `setout make FILE` is the main one"), ExitCode.CommandLineWrong);
+            if (MistakenOption(parsed, args) is { } mistaken)
+                throw new StopException(UnknownOption(mistaken, parsed, root), ExitCode.CommandLineWrong);
             if (parsed.Errors.Count > 0 && parsed.Action is not System.CommandLine.Help.HelpAction)
                 throw new StopException(Explain(parsed, root), ExitCode.CommandLineWrong);
             return parsed.Invoke(new InvocationConfiguration
@@ -59,26 +61,33 @@ internal static class CommandTree
         return root;
     }
 
+    // A mistyped option would otherwise be taken for the name of a file.
+    private static string? MistakenOption(ParseResult parsed, string[] args) =>
+        args.Contains("--") ? null : parsed.Tokens.Where(token => token is { Type: TokenType.Argument, Value: ['-', _, ..] }).Select(token => token.Value).FirstOrDefault(value => args.Contains(value) && !IsValueOfOption(parsed, value));
+
+    private static bool IsValueOfOption(ParseResult parsed, string value) =>
+        parsed.CommandResult.Children.OfType<OptionResult>().Any(option => option.Tokens.Any(token => token.Value == value));
+
+    private static Diagnostic UnknownOption(string unknown, ParseResult parsed, RootCommand root)
+    {
+        string name = unknown.Split('=')[0];
+        IEnumerable<string> known = parsed.CommandResult.Command.Options.Concat(root.Options).SelectMany(option => option.Aliases.Append(option.Name));
+        return CommandLineFindings.BadArguments($"`{Name(parsed, root)}` has no option `{name}`", NearName.Find(name, known) is { } near ? $"is `{near}` meant?" : Help(parsed, root));
+    }
+
     private static Diagnostic Explain(ParseResult parsed, RootCommand root)
     {
-        string message = parsed.Errors[0].Message;
-        string at = parsed.CommandResult.Command == root ? "setout" : $"setout {parsed.CommandResult.Command.Name}";
-        string hint = $"`{at} --help` tells how it is written";
-        if (parsed.UnmatchedTokens is [var unknown, ..])
-        {
-            IEnumerable<string> known = unknown.StartsWith('-')
-                ? parsed.CommandResult.Command.Options.Concat(root.Options).SelectMany(option => option.Aliases.Append(option.Name))
-                : root.Subcommands.Select(command => command.Name);
-            string kind = unknown.StartsWith('-') ? "option" : parsed.CommandResult.Command == root ? "command" : "argument";
-            message = $"`{at}` has no {kind} `{unknown}`";
-            if (kind != "argument" && NearName.Find(unknown, known) is { } near)
-                hint = $"is `{near}` meant?";
-            else if (kind == "argument")
-                message = $"`{unknown}` is more than `{at}` can take";
-        }
-
-        return CommandLineFindings.BadArguments(InOurWords(message, parsed), hint);
+        if (parsed.UnmatchedTokens is not [var unknown, ..])
+            return CommandLineFindings.BadArguments(InOurWords(parsed.Errors[0].Message, parsed), Help(parsed, root));
+        if (parsed.CommandResult.Command != root)
+            return CommandLineFindings.BadArguments($"`{unknown}` is more than `{Name(parsed, root)}` can take", Help(parsed, root));
+        string? near = NearName.Find(unknown, root.Subcommands.Select(command => command.Name));
+        return CommandLineFindings.BadArguments($"there is no command `{unknown}`", near is null ? Help(parsed, root) : $"is `{near}` meant?");
     }
+
+    private static string Name(ParseResult parsed, RootCommand root) => parsed.CommandResult.Command == root ? "setout" : $"setout {parsed.CommandResult.Command.Name}";
+
+    private static string Help(ParseResult parsed, RootCommand root) => $"`{Name(parsed, root)} --help` tells how it is written";
 
     private static string InOurWords(string message, ParseResult parsed)
     {

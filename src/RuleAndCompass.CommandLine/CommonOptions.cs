@@ -105,6 +105,8 @@ internal sealed class CommonOptions
             Outcome<Expression> read = ScriptReader.ReadExpression(value);
             if (read.Value is null || read.HasErrors)
                 throw new StopException(CommandLineFindings.ValueNotRead(name, value, read.Diagnostics.FirstOrDefault()?.Message ?? "it is no value"), ExitCode.CommandLineWrong);
+            if (read.Value is Reference { Steps: [{ Name.Text: not "pi" }] })
+                throw new StopException(CommandLineFindings.ValueNotRead(name, value, "it is a name, not a value"), ExitCode.CommandLineWrong);
             if (!givens.TryAdd(name, value))
                 throw new StopException(CommandLineFindings.GivenTwice(name), ExitCode.CommandLineWrong);
         }

@@ -16,12 +16,18 @@ internal static class PlateFiles
     /// <summary>The endings of file names, which are the formats, that a kind can be written in.</summary>
     public static ImmutableArray<string> EndingsOf(string kind) => kind == "cut" ? ["svg"] : ["pdf"];
 
-    /// <summary>One kind of plates.</summary>
-    public static byte[] Write(Layout layout, string kind, CancellationToken cancellation) => kind switch
+    /// <summary>One kind of plates, in the first of its formats.</summary>
+    public static byte[] Write(Layout layout, string kind, CancellationToken cancellation)
     {
-        "steps" => Pdf(StepPlates.Compose(layout, new() { ScriptName = layout.Script.Name }, cancellation: cancellation), layout, "steps", cancellation),
-        _ => throw new UnreachableException($"No plates called {kind}."),
-    };
+        string script = layout.Script.Name;
+        return kind switch
+        {
+            "steps" => Pdf(StepPlates.Compose(layout, new() { ScriptName = script }, cancellation: cancellation), layout, "step plates", cancellation),
+            "full" => Pdf(FullSizePlate.Compose(layout, new() { ScriptName = script }, cancellation), layout, "full size", cancellation),
+            "cut" => CutFile.Write(layout, script, cancellation),
+            _ => throw new UnreachableException($"No plates called {kind}."),
+        };
+    }
 
     private static byte[] Pdf(ImmutableArray<Page> pages, Layout layout, string what, CancellationToken cancellation) =>
         PdfWriter.Write(pages, $"{(layout.Title.Length > 0 ? layout.Title : layout.Script.Name)}: {what}", layout.Script.Name, cancellation: cancellation);

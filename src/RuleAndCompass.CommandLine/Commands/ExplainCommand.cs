@@ -24,9 +24,9 @@ internal static class ExplainCommand
     {
         string text = what switch
         {
-            null => Reference.Text,
+            null => LanguageReference.Text,
             Schema => Resource.Read(typeof(ExplainCommand).Assembly, "schema.json"),
-            _ => Reference.Find(what) ?? throw new StopException(CommandLineFindings.NothingToExplain(what, Reference.Near(what)), ExitCode.CommandLineWrong),
+            _ => LanguageReference.Find(what) ?? throw new StopException(CommandLineFindings.NothingToExplain(what, LanguageReference.Near(what)), ExitCode.CommandLineWrong),
         };
         terminal.Output.Write(text);
         return ExitCode.Well;

@@ -32,7 +32,7 @@ internal sealed class NumberJson(Decider decider, int? digits)
         {
             string text = Decimal(value);
             json.WriteString(key, text);
-            if (ExactForm(value) is { } form && form != text)
+            if (ExactForm(value) is { } form && form.Replace('−', '-') != text)
                 exact.Add((key, form));
         }
 

@@ -10,9 +10,10 @@ namespace RuleAndCompass.CommandLine;
 /// A section is a heading with what follows it, to the next heading of its own depth or above. What is sought is found first among the words in backticks of
 /// headings, then among those of headings without, then in what a table row or a paragraph begins with or names in backticks.
 /// </remarks>
-internal static partial class Reference
+internal static partial class LanguageReference
 {
-    public static string Text { get; } = Resource.Read(typeof(RecipeBook).Assembly, "language.md");
+    public static string Text { get; } =
+        Resource.Read(typeof(RecipeBook).Assembly, "language.md").TrimEnd() + "\n\n" + Resource.Read(typeof(LanguageReference).Assembly, "command-line.md");
 
     /// <summary>What the reference says of a code or a word; null where that is nothing.</summary>
     public static string? Find(string what)
