@@ -21,6 +21,9 @@ public sealed record Locate(int Number, int Stage, int Want, PointMark Point, bo
 {
     /// <inheritdoc/>
     public override Mark Makes => Point;
+
+    /// <summary>The mark it is measured from, whose own error it then carries; null for the middle of the sheet.</summary>
+    public PointMark? From { get; init; }
 }
 
 /// <summary>Lay the straightedge to two points and draw; the line runs from the first to the second.</summary>

@@ -15,7 +15,8 @@ internal sealed class MarkIndex(Decider decider)
     private const double HalfTurnCells = Math.PI / CellRadians;
 
     private readonly Dictionary<(long X, long Y), List<PointMark>> points = [];
-    private readonly Dictionary<long, List<LineMark>> lines = [];
+    private readonly Dictionary<(long Turn, long Offset), List<LineMark>> lines = [];
+    private readonly Dictionary<long, LineMark> directions = [];
     private readonly Dictionary<(long X, long Y), List<CircleMark>> circles = [];
 
     public void Add(Mark mark)
@@ -27,6 +28,7 @@ internal sealed class MarkIndex(Decider decider)
                 break;
             case LineMark line:
                 AddTo(lines, Cell(line.Line), line);
+                directions.TryAdd(Cell(line.Line.Direction), line);
                 break;
             case CircleMark circle:
                 AddTo(circles, Cell(circle.Circle.Centre), circle);
@@ -46,12 +48,16 @@ internal sealed class MarkIndex(Decider decider)
 
     public LineMark? Find(Line wanted)
     {
-        long cell = Cell(wanted);
-        for (long near = cell - 1; near <= cell + 1; near++)
-            if (lines.TryGetValue(Wrapped(near), out List<LineMark>? here))
+        foreach ((long turn, long offset) in Around(Cell(wanted)))
+        {
+            // Past half a turn the same line is seen from its other end.
+            bool wraps = turn != Wrapped(turn);
+            if (lines.TryGetValue((Wrapped(turn), wraps ? -offset - 1 : offset), out List<LineMark>? here))
                 foreach (LineMark mark in here)
                     if (IsSame(mark.Line, wanted))
                         return mark;
+        }
+
         return null;
     }
 
@@ -64,6 +70,16 @@ internal sealed class MarkIndex(Decider decider)
                         && (ReferenceEquals(mark.Circle.RadiusSquared, wanted.RadiusSquared) || IsZero(mark.Circle.RadiusSquared - wanted.RadiusSquared))
                         && IsSame(mark.Circle.Centre, wanted.Centre))
                         return mark;
+        return null;
+    }
+
+    /// <summary>The first drawn line that runs along <paramref name="way"/> or against it; null where none does.</summary>
+    public LineMark? FindParallel(Vector way)
+    {
+        long cell = Cell(way);
+        for (long near = cell - 1; near <= cell + 1; near++)
+            if (directions.TryGetValue(Wrapped(near), out LineMark? mark) && IsZero(Vector.Cross(mark.Line.Direction, way)))
+                return mark;
         return null;
     }
 
@@ -96,10 +112,24 @@ internal sealed class MarkIndex(Decider decider)
 
     private static (long X, long Y) Cell(Point point) => ((long)Math.Floor(point.XMillimetres / CellMillimetres), (long)Math.Floor(point.YMillimetres / CellMillimetres));
 
-    private static long Cell(Line line)
+    private static (long Turn, long Offset) Cell(Line line)
     {
-        double turn = Math.Atan2(line.Direction.Y.ToDouble(), line.Direction.X.ToDouble());
-        return Wrapped((long)Math.Floor((turn < 0 ? turn + Math.PI : turn) / CellRadians));
+        (double dx, double dy) = Upward(line.Direction);
+        double offset = ((dx * line.Start.YMillimetres) - (dy * line.Start.XMillimetres)) / Math.Sqrt((dx * dx) + (dy * dy));
+        return (Cell(line.Direction), (long)Math.Floor(offset / CellMillimetres));
+    }
+
+    private static long Cell(Vector way)
+    {
+        (double dx, double dy) = Upward(way);
+        return Wrapped((long)Math.Floor(Math.Atan2(dy, dx) / CellRadians));
+    }
+
+    // Of the two ways a line runs, the one in the upper half plane.
+    private static (double Dx, double Dy) Upward(Vector way)
+    {
+        double dx = way.X.ToDouble(), dy = way.Y.ToDouble();
+        return dy < 0 || (dy == 0 && dx < 0) ? (-dx, -dy) : (dx, dy);
     }
 
     private static long Wrapped(long cell)

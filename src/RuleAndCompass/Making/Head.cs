@@ -20,6 +20,8 @@ internal sealed class Head
     private readonly List<Diagnostic> findings;
     private readonly Evaluator evaluator = new(new Decider(new DeciderOptions()));
 
+    private Kit? kit;
+
     private Head(List<Diagnostic> findings) => this.findings = findings;
 
     public string? Title { get; private set; }
@@ -28,7 +30,8 @@ internal sealed class Head
 
     public Sheet? Board { get; private set; }
 
-    public Kit Kit { get; private set; } = new(true, null, null, null, true, true, new Rational(1, 2));
+    /// <summary>Without a kit sentence: all but the beam compass, as large as the room needs, the scale to half a millimetre.</summary>
+    public Kit Kit => kit ?? new(true, null, new Reach(1, Room.Width + Room.Height), null, true, true, new Rational(1, 2));
 
     public Hand Hand { get; private set; } = Hand.Ordinary;
 
@@ -91,8 +94,8 @@ internal sealed class Head
                 case BoardSentence board:
                     Board = new(null, Size(board.Width), Size(board.Height));
                     break;
-                case KitSentence kit:
-                    Kit = KitOf(kit);
+                case KitSentence sentenceKit:
+                    kit = KitOf(sentenceKit);
                     break;
                 case HandSentence hand:
                     Hand = HandOf(hand);
@@ -126,24 +129,24 @@ internal sealed class Head
 
     private Kit KitOf(KitSentence sentence)
     {
-        Kit kit = new(false, null, null, null, false, false, null);
+        Kit tools = new(false, null, null, null, false, false, null);
         HashSet<ToolKind> seen = [];
         foreach (ToolClause tool in sentence.Tools)
         {
             if (!seen.Add(tool.Tool))
                 throw new FaultException(MakingFindings.BadKit($"the kit names its {tool.Tool.ToString().ToLowerInvariant()} twice", tool.Span, "one of each is enough"));
-            kit = tool.Tool switch
+            tools = tool.Tool switch
             {
-                ToolKind.Straightedge => kit with { HasStraightedge = true, Straightedge = Size(tool.First!) },
-                ToolKind.Dividers => kit with { Dividers = ReachOf(tool) },
-                ToolKind.Beam => kit with { Beam = ReachOf(tool) },
-                ToolKind.Square => kit with { Square = true },
-                ToolKind.Protractor => kit with { Protractor = true },
-                _ => kit with { ScaleStep = Size(tool.First!) },
+                ToolKind.Straightedge => tools with { HasStraightedge = true, Straightedge = Size(tool.First!) },
+                ToolKind.Dividers => tools with { Dividers = ReachOf(tool) },
+                ToolKind.Beam => tools with { Beam = ReachOf(tool) },
+                ToolKind.Square => tools with { Square = true },
+                ToolKind.Protractor => tools with { Protractor = true },
+                _ => tools with { ScaleStep = Size(tool.First!) },
             };
         }
 
-        return kit;
+        return tools;
     }
 
     private Reach ReachOf(ToolClause tool)

@@ -1,3 +1,4 @@
+using RuleAndCompass.Bench;
 using RuleAndCompass.Geometry;
 using RuleAndCompass.Numbers;
 

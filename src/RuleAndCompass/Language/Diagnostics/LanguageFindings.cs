@@ -9,35 +9,32 @@ internal static class LanguageFindings
 {
     // Words and their order
 
-    internal static Diagnostic UnknownSentenceWord(string word, SourceSpan span)
+    internal static Diagnostic UnknownSentenceWord(string found, IEnumerable<string> words, SourceSpan span)
     {
-        string? near = NearName.Find(word, Vocabulary.Sentences.Select(entry => entry.Word));
+        string? near = Habits.FindFirstWord(found) ?? NearName.Find(found, SentenceForms.Words);
         return Error(
             "RC1001",
-            $"no sentence begins with `{Clip(word)}`",
+            $"no sentence begins with {Quote(found)}",
             span,
-            near is null
+            Vocabulary.LittleWords.Contains(found) ? "a line that begins with a little word goes on with the sentence before it, and there is none"
+            : near is null
                 ? "a sentence begins with a word such as `prick`, `rule`, `strike`, `keep`, `let` or `for`"
-                : $"did you mean `{near}`? For example `{Vocabulary.FindExample(near)}`");
+                : $"did you mean `{near}`? For example `{SentenceForms.FindNearest(near, words)}`");
     }
 
-    internal static Diagnostic NoSentenceWord(string found, SourceSpan span) => Error(
-        "RC1001",
-        $"no sentence begins with {Quote(found)}",
-        span,
-        "a sentence begins with a word such as `prick`, `rule`, `strike`, `keep`, `let` or `for`");
-
-    internal static Diagnostic Unexpected(string found, IReadOnlyList<string> expected, string? near, string sentenceWord, SourceSpan span) => Error(
+    internal static Diagnostic Unexpected(string found, IReadOnlyList<string> expected, string? hint, string? example, SourceSpan span) => Error(
         "RC1002",
         expected.Count is 0 or > 5 ? $"{Quote(found)} is not understood here" : $"{Quote(found)} stands where {Join(expected)} is expected",
         span,
-        near is not null ? $"did you mean `{near}`?" : expected.Count > 5 ? $"here may stand {Join(expected)}" : Example(sentenceWord));
+        hint is not null ? hint
+        : expected is [Rules.AName] && example is not null ? $"put a name before {Quote(found)}, {Example(example)}"
+        : expected.Count > 5 ? $"here may stand {Join(expected)}" : Example(example));
 
-    internal static Diagnostic BreaksOff(string last, IReadOnlyList<string> expected, string sentenceWord, SourceSpan span) => Error(
+    internal static Diagnostic BreaksOff(string? last, IReadOnlyList<string> expected, string? example, SourceSpan span) => Error(
         "RC1003",
-        expected.Count == 0 ? $"the sentence breaks off after {Quote(last)}" : $"the sentence breaks off after {Quote(last)}; {Join(expected)} is expected",
+        last is null ? $"nothing is written where {Join(expected)} is expected" : expected.Count == 0 ? $"the sentence breaks off after {Quote(last)}" : $"the sentence breaks off after {Quote(last)}; {Join(expected)} is expected",
         span,
-        Example(sentenceWord));
+        Example(example));
 
     internal static Diagnostic LittleWordAsName(string word, SourceSpan span)
     {
@@ -45,11 +42,11 @@ internal static class LanguageFindings
         return Error("RC1004", $"`{word}` is a word of the language and can't be a name", span, $"call it `{capital}` or `{word}_1`, say");
     }
 
-    internal static Diagnostic TooManyWords(string found, string? near, IReadOnlyList<string> possible, SourceSpan span) => Error(
+    internal static Diagnostic TooManyWords(string found, string? hint, IReadOnlyList<string> possible, SourceSpan span) => Error(
         "RC1005",
         $"the sentence is complete before {Quote(found)}",
         span,
-        near is not null ? $"did you mean `{near}`?"
+        hint is not null ? hint
         : possible.Count > 0 ? $"leave it out, or begin a line with the next sentence; only {Join(possible)} could follow"
         : "leave it out, or begin a line with the next sentence");
 
@@ -103,8 +100,6 @@ internal static class LanguageFindings
         span,
         "write it out; `{{` is a brace");
 
-    internal static Diagnostic NothingWritten(SourceSpan span) => Error("RC1003", "nothing is written where a value is expected", span, "write a value such as `80 mm` or `43°18'`");
-
     // Signs, numbers and units
 
     internal static Diagnostic StraySign(string found, Rune first, SourceSpan span)
@@ -141,6 +136,7 @@ internal static class LanguageFindings
         ';' => "one sentence stands on a line; begin a new line",
         '{' or '}' => "braces show a value within text: `\"hour {h}\"`; an index stands in `[` and `]`",
         '_' => "a name begins with a letter",
+        > 127 when Rune.IsDigit(sign) => "figures are written with 0 to 9",
         ':' => "leave it out; a name and its value are parted by `=`",
         _ => null,
     };
@@ -193,7 +189,7 @@ internal static class LanguageFindings
             "RC1020",
             $"{Quote(word)} is no unit",
             span,
-            unit is null ? "units are `mm`, `cm`, `m`, `in`, `ft`, `deg` and `turn`" : $"did you mean `{unit}`?");
+            word == "h" ? "hours of turn are written closed up: `2h`, `2h30m`" : unit is null ? "units are `mm`, `cm`, `m`, `in`, `ft`, `deg` and `turn`" : $"did you mean `{unit}`?");
     }
 
     internal static Diagnostic UnitAfterValue(string unit, SourceSpan span) => Error(
@@ -212,7 +208,7 @@ internal static class LanguageFindings
         "RC1023",
         $"an angle is expected, and `{number}` has no mark",
         span,
-        number.Contains('/', StringComparison.Ordinal) ? $"write `{number} deg` or `{number} turn`" : $"write `{number}°`, `{number}'` or `{number} turn`");
+        $"write {(number.Contains('/', StringComparison.Ordinal) ? $"`{number} turn`" : $"`{number}°`")}, say; an angle ends in `°`, `'`, `\"`, `deg` or `turn`");
 
     internal static Diagnostic UnknownFunction(string name, SourceSpan span)
     {
@@ -250,7 +246,7 @@ internal static class LanguageFindings
             "RC1027",
             $"{Quote(name)} is no standard sheet",
             span,
-            near is not null && name.Length > 1 ? $"did you mean `{near}`?" : "sheets are `A0` to `A6`, `letter`, `legal`, `tabloid`, or two sizes: `sheet 420 mm by 297 mm`");
+            near is not null && (name.Length > 2 || near.Equals(name, StringComparison.OrdinalIgnoreCase)) ? $"did you mean `{near}`?" : "sheets are `A0` to `A6`, `letter`, `legal`, `tabloid`, or two sizes: `sheet 420 mm by 297 mm`");
     }
 
     internal static Diagnostic SaidTwice(string clause, SourceSpan span) => Error(
@@ -357,7 +353,7 @@ internal static class LanguageFindings
 
     internal static Diagnostic TooManyFindings(int limit, SourceSpan span) => Error(
         "RC1095",
-        $"more than {Figure(limit)} findings, which is the limit; the rest is not told",
+        $"more than {Figure(limit)} findings, which is the limit; the rest of the script is not read",
         span,
         "mend these first");
 
@@ -367,7 +363,7 @@ internal static class LanguageFindings
 
     private static Diagnostic Error(string code, string message, SourceSpan span, string? hint) => new(code, Severity.Error, message, span, hint);
 
-    private static string? Example(string sentenceWord) => Vocabulary.FindExample(sentenceWord) is { } example ? $"for example `{example}`" : null;
+    private static string? Example(string? example) => example is null ? null : $"for example `{example}`";
 
     private static string Quote(string found) => found.Contains('`', StringComparison.Ordinal) ? $"'{Clip(found)}'" : $"`{Clip(found)}`";
 

@@ -16,6 +16,8 @@ internal sealed class BlockBuilder(string text, ReadingLimits limits, List<Diagn
     private readonly List<(Token Opener, Token End)> _askew = [];
     private LineMap? _lines;
     private bool _wantSeen;
+    private int _openRecipes;
+    private int _strayBranches;
 
     /// <summary>The names that sentences left out of the tree would have bound.</summary>
     public ImmutableHashSet<string> UnreadNames => _unread.ToImmutable();
@@ -84,12 +86,13 @@ internal sealed class BlockBuilder(string text, ReadingLimits limits, List<Diagn
 
     private ImmutableArray<Sentence>.Builder Body => _open.Count == 0 ? _outermost : _open.Peek().Body;
 
-    private bool InRecipe => _open.Any(block => block.Word == "recipe");
+    private bool InRecipe => _openRecipes > 0;
 
     private void Open(Sentence? header, string word, Token opener)
     {
         if (_open.Count == limits.MaximumNesting)
             findings.Add(LanguageFindings.TooDeep(limits.MaximumNesting, opener.Span));
+        _openRecipes += word == "recipe" ? 1 : 0;
         _open.Push(new OpenBlock(_open.Count >= limits.MaximumNesting ? null : header, word, opener));
     }
 
@@ -98,6 +101,7 @@ internal sealed class BlockBuilder(string text, ReadingLimits limits, List<Diagn
         if (_open.Count == 0 || _open.Peek().Word != "when")
         {
             findings.Add(LanguageFindings.OtherwiseOutOfPlace(_open.Count == 0 ? null : _open.Peek().Word, word.Span));
+            _strayBranches += _open.Count == 0 ? 1 : 0;
             return;
         }
 
@@ -112,7 +116,10 @@ internal sealed class BlockBuilder(string text, ReadingLimits limits, List<Diagn
 
     private void Close(Token end)
     {
-        if (_open.Count == 0)
+        // the `end` after an `otherwise` without a `when` is the same fault
+        if (_open.Count == 0 && _strayBranches > 0)
+            _strayBranches--;
+        else if (_open.Count == 0)
             findings.Add(LanguageFindings.EndTooMany(end.Span));
         else
             Leave(end, isWhole: true);
@@ -121,6 +128,7 @@ internal sealed class BlockBuilder(string text, ReadingLimits limits, List<Diagn
     private void Leave(Token end, bool isWhole)
     {
         OpenBlock block = _open.Pop();
+        _openRecipes -= block.Word == "recipe" ? 1 : 0;
         if (isWhole && Indent(block.Opener) != Indent(end))
             _askew.Add((block.Opener, end));
         SourceSpan span = block.Opener.Span.To(end.Span);

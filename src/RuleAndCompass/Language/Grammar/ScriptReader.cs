@@ -25,20 +25,8 @@ public static class ScriptReader
 
         (List<Token> tokens, List<Comment> comments, List<Diagnostic> findings) = Lexer.Read(text, limits, cancellation);
         BlockBuilder blocks = new(text, limits, findings);
-        int sentences = 0;
-        for (int start = 0; start < tokens.Count;)
-        {
-            cancellation.ThrowIfCancellationRequested();
-            if (++sentences > limits.MaximumSentences)
-            {
-                findings.Add(LanguageFindings.TooManySentences(limits.MaximumSentences, tokens[start].Span));
-                break;
-            }
-
-            int end = SentenceEnd(tokens, start);
-            start = ReadSentence(text, tokens, start, end, limits, findings, blocks);
-        }
-
+        SentenceReader reader = new(text, tokens, limits, findings, blocks);
+        reader.ReadAll(cancellation);
         ImmutableArray<Sentence> tree = blocks.Finish();
         Script script = new(name, text, tree) { Comments = [.. comments], UnreadNames = blocks.UnreadNames };
         return new Outcome<Script>(script, InOrder(findings, limits));
@@ -58,76 +46,9 @@ public static class ScriptReader
         IResult<Expression> result = SentenceGrammar.LoneExpression(stream.Input(0));
         findings.AddRange(stream.Findings);
         if (!result.WasSuccessful && stream.Findings.Count == 0)
-            findings.Add(tokens.Count == 0 ? LanguageFindings.NothingWritten(new SourceSpan(0, text.Length)) : SentenceFault.Explain(stream, "", default));
+            findings.Add(SentenceFault.Explain(stream, "", new SourceSpan(0, text.Length)));
         return new Outcome<Expression>(findings.Count == 0 ? result.Value : null, InOrder(findings, limits));
     }
-
-    // A line that ends in a comma, or whose next begins with a little word, goes on there.
-    private static int SentenceEnd(List<Token> tokens, int start)
-    {
-        int end = start + 1;
-        while (end < tokens.Count
-            && (!tokens[end].FirstOnLine || tokens[end - 1].IsSign(",") || (tokens[end].Kind == TokenKind.Word && Vocabulary.LittleWords.Contains(tokens[end].Text))))
-            end++;
-        return end;
-    }
-
-    /// <summary>Reads the sentence, hands it to the blocks, and returns where the next begins.</summary>
-    private static int ReadSentence(string text, List<Token> tokens, int start, int end, ReadingLimits limits, List<Diagnostic> findings, BlockBuilder blocks)
-    {
-        Token first = tokens[start];
-        if (tokens.FindIndex(start, end - start, token => token.Kind == TokenKind.Fault) >= 0)
-        {
-            // a comma at the end of a faulty line must not take the next sentence with it
-            int next = tokens.FindIndex(start + 1, end - start - 1, token => token.FirstOnLine && Vocabulary.IsSentenceWord(token.Text));
-            end = next < 0 ? end : next;
-            if (first.Kind == TokenKind.Word && !Vocabulary.IsSentenceWord(first.Text) && tokens.FindIndex(start, end - start, token => token.Kind == TokenKind.Fault) < 0)
-                findings.Add(LanguageFindings.UnknownSentenceWord(first.Text, first.Span));
-            blocks.AddBad(Meant(first), first, UnreadName.Find(tokens, start, end));
-            return end;
-        }
-
-        if (first.Kind != TokenKind.Word || !Vocabulary.IsSentenceWord(first.Text))
-        {
-            string written = text.Substring(first.Span.Start, first.Span.Length);
-            findings.Add(first.Kind == TokenKind.Word ? LanguageFindings.UnknownSentenceWord(first.Text, first.Span) : LanguageFindings.NoSentenceWord(written, first.Span));
-            blocks.AddBad(Meant(first), first, UnreadName.Find(tokens, start, end));
-            return end;
-        }
-
-        TokenStream stream = new(text, tokens, start, end - start, limits);
-        IResult<Sentence> result = SentenceGrammar.Sentence(stream.Input(0));
-        if (result.WasSuccessful)
-        {
-            findings.AddRange(stream.Findings);
-            findings.AddRange(stream.Doubts);
-            if (stream.Findings.Count == 0 && stream.Doubts.Count == 0)
-                blocks.Add(result.Value, first);
-            else
-                blocks.AddBad(first.Text, first, UnreadName.Find(tokens, start, end));
-            return end;
-        }
-
-        findings.AddRange(stream.Findings);
-        if (!stream.LimitMet)
-        {
-            Diagnostic finding = SentenceFault.Explain(stream, first.Text, first.Span);
-            if (!stream.Findings.Any(other => other.Span == finding.Span))
-                findings.Add(finding);
-            Token found = stream[stream.Farthest];
-            if (stream.Farthest > 0 && found.FirstOnLine && Vocabulary.IsSentenceWord(found.Text))
-                end = start + stream.Farthest;
-        }
-
-        blocks.AddBad(first.Text, first, UnreadName.Find(tokens, start, end));
-        return end;
-    }
-
-    // The sentence word that was meant, so that a mistyped `for` still takes its `end`.
-    private static string Meant(Token first) =>
-        first.Kind != TokenKind.Word ? ""
-        : Vocabulary.IsSentenceWord(first.Text) ? first.Text
-        : NearName.Find(first.Text, Vocabulary.Sentences.Select(entry => entry.Word)) ?? "";
 
     private static ImmutableArray<Diagnostic> InOrder(List<Diagnostic> findings, ReadingLimits limits)
     {

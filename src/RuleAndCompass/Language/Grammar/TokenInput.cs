@@ -14,7 +14,7 @@ internal sealed class TokenStream
 
     private readonly List<Token> _tokens;
     private readonly int _start;
-    private readonly TokenInput?[] _inputs;
+    private readonly List<TokenInput> _inputs = [];
     private readonly int _deepest;
     private int _depth;
     private int _operators;
@@ -23,7 +23,6 @@ internal sealed class TokenStream
     public TokenStream(string text, List<Token> tokens, int start, int count, ReadingLimits limits)
     {
         (Text, _tokens, _start, Count, Limits) = (text, tokens, start, count, limits);
-        _inputs = new TokenInput?[count + 1];
         _deepest = Math.Min(DeepestBrackets, limits.MaximumNesting);
         int end = count == 0 ? 0 : tokens[start + count - 1].Span.End;
         EndToken = new Token(TokenKind.End, "", new SourceSpan(end, 0));
@@ -53,7 +52,13 @@ internal sealed class TokenStream
 
     private Token EndToken { get; }
 
-    public TokenInput Input(int position) => _inputs[position] ??= new TokenInput(this, position);
+    /// <summary>The input at a position, one for each, made when it is first reached; they are reached in order.</summary>
+    public TokenInput Input(int position)
+    {
+        while (_inputs.Count <= position)
+            _inputs.Add(new TokenInput(this, _inputs.Count));
+        return _inputs[position];
+    }
 
     public Token this[int position] => position < Count ? _tokens[_start + position] : EndToken;
 

@@ -11,39 +11,6 @@ public static class Vocabulary
         "about above ahead along and angle anticlockwise as at behind below between by clockwise distance down from left meets nearest not of on or "
         + "right than through timed to touches toward turned up where with within").Split(' ').ToFrozenSet();
 
-    /// <summary>The words a sentence may begin with, each with a sentence that shows it.</summary>
-    public static ImmutableArray<(string Word, string Example)> Sentences { get; } =
-    [
-        ("title", "title \"Garden dial\""),
-        ("sheet", "sheet A3 sideways"),
-        ("board", "board 700 mm by 500 mm"),
-        ("kit", "kit straightedge 600 mm, dividers 2 mm to 180 mm"),
-        ("hand", "hand ordinary, but edge 0.2 mm"),
-        ("note", "note \"cut before the stone is polished\""),
-        ("use", "use \"corbels.setout\""),
-        ("given", "given span = 960 mm from 500 mm to 2 m"),
-        ("let", "let half = span / 2"),
-        ("stage", "stage \"The springing\""),
-        ("prick", "prick C where rim meets noon, above O"),
-        ("rule", "rule noon through O toward up"),
-        ("strike", "strike rim about O opening 80 mm"),
-        ("keep", "keep noon from O to C heavy"),
-        ("letter", "letter \"XII\" at C height 5 mm"),
-        ("claim", "claim six square to noon"),
-        ("compare", "compare distance A to B with span / 2 within 0.1 mm"),
-        ("for", "for h = 1 to 5"),
-        ("when", "when remainder(h, 5) = 0"),
-        ("otherwise", "otherwise when h > 12"),
-        ("end", "end"),
-        ("recipe", "recipe \"a corbel's curve\""),
-        ("needs", "needs centre point, radius length = 40 mm"),
-        ("gives", "gives curve as \"profile of a corbel\""),
-        ("trade", "trade \"masonry\""),
-        ("source", "source \"the book it rests on\""),
-        ("follow", "follow \"a corbel's curve\" as left_corbel with centre = A"),
-        ("refuse", "refuse \"the span must exceed the rise\""),
-    ];
-
     /// <summary>Units of length with their size in millimetres, as a numerator over a denominator.</summary>
     internal static FrozenDictionary<string, (int Numerator, int Denominator)> LengthUnits { get; } = new Dictionary<string, (int, int)>
     {
@@ -101,18 +68,10 @@ public static class Vocabulary
         "height", "feet", "head", "minutes", "one", "point", "line", "circle", "radius", "x", "y", "pi",
     ];
 
-    private static readonly FrozenDictionary<string, string> Examples = Sentences.ToFrozenDictionary(entry => entry.Word, entry => entry.Example);
-
     private static readonly FrozenDictionary<string, string> Interned =
-        LittleWords.Concat(Examples.Keys).Concat(Units).Concat(Functions).Concat(PlaceWords).Concat(Kinds).Distinct().ToFrozenDictionary(word => word);
+        LittleWords.Concat(SentenceForms.Words).Concat(Units).Concat(Functions).Concat(PlaceWords).Concat(Kinds).Distinct().ToFrozenDictionary(word => word);
 
     private static readonly FrozenDictionary<string, string>.AlternateLookup<ReadOnlySpan<char>> InternedBySpan = Interned.GetAlternateLookup<ReadOnlySpan<char>>();
-
-    /// <summary>Finds a sentence that begins with the word.</summary>
-    public static string? FindExample(string sentenceWord) => Examples.GetValueOrDefault(sentenceWord);
-
-    /// <summary>Whether a sentence may begin with the word.</summary>
-    public static bool IsSentenceWord(string word) => Examples.ContainsKey(word);
 
     /// <summary>Whether the word has a meaning of its own somewhere in the language.</summary>
     internal static bool Holds(string word) => Interned.ContainsKey(word);

@@ -52,16 +52,17 @@ internal sealed partial class Constructions
         if (bench.Standing(wanted) is { } standing)
             return standing;
         // What is drawn already serves as the sheet's edge where the new line is square or parallel to it.
-        foreach (Act act in bench.Acts)
-            if (act.Makes is LineMark drawn)
-            {
-                DirectedLine line = new(drawn, false);
-                Real along = Vector.Dot(drawn.Line.Direction, way), across = Vector.Cross(drawn.Line.Direction, way);
-                if (IsNothing(along) && Decider.Decide(along).IsZero && CanSquare(line, through))
-                    return Decider.Sign(across) > 0 ? Square(line, through, name, tool) : Square(line.Reversed(), through, name, tool);
-                if (IsNothing(across) && Decider.Decide(across).IsZero && CanParallel())
-                    return Decider.Sign(along) > 0 ? Parallel(line, through, name, tool) : Parallel(line.Reversed(), through, name, tool);
-            }
+        if (bench.Marks.FindParallel(way.QuarterTurn) is { } plumb && CanSquare(new(plumb, false), through))
+        {
+            DirectedLine line = new(plumb, false);
+            return Decider.Sign(Vector.Cross(line.Direction, way)) > 0 ? Square(line, through, name, tool) : Square(line.Reversed(), through, name, tool);
+        }
+
+        if (bench.Marks.FindParallel(way) is { } level && CanParallel())
+        {
+            DirectedLine line = new(level, false);
+            return Decider.Sign(Vector.Dot(line.Direction, way)) > 0 ? Parallel(line, through, name, tool) : Parallel(line.Reversed(), through, name, tool);
+        }
 
         if (!Kit.HasStraightedge)
             throw NoTool("a line in a direction", "`straightedge`");
@@ -69,7 +70,7 @@ internal sealed partial class Constructions
         double reach = Reach(through.Point, Math.Cos(degrees), Math.Sin(degrees));
         Rational distance = Rational.FromDouble(Math.Max(1, Math.Floor(reach)));
         Point aim = through.Point.Plus((distance / Real.Sqrt(wanted.DirectionSquared)) * way);
-        PointMark aimed = bench.Locate(aim, null, AimedWords(through, aim));
+        PointMark aimed = bench.Locate(aim, null, AimedWords(through, aim), through);
         return bench.Lay(through, aimed, name, wanted);
     }
 
@@ -77,9 +78,6 @@ internal sealed partial class Constructions
         Kit.Square || (HasDividers && Kit.HasStraightedge) || (Kit.Protractor && Holds(line.Mark.Line, through));
 
     private bool CanParallel() => Kit.Square || (HasDividers && Kit.HasStraightedge);
-
-    // Far from nothing needs no decision.
-    private static bool IsNothing(Real value) => Math.Abs(value.ToDouble()) < 1e-6;
 
     // How far the room goes on that way, at most a third of it: a long base, still well on the stock.
     private double Reach(Point from, double dx, double dy)

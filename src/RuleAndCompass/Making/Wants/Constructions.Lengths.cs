@@ -30,9 +30,10 @@ internal sealed partial class Constructions
         string start = from is null ? "the middle of the sheet" : from.Name;
         Vector step = from is null ? new(at.X, at.Y) : at.From(from.Point);
         string how = Steps(step);
-        string off = Kit.ScaleStep is null ? ", taken off the full-size plate," : "";
-        string says = how.Length == 0 ? $"Prick {{}} at {start}." : $"Measure {how} from {start}{off} and prick {{}}.";
-        return bench.Locate(at, name, says);
+        string says = how.Length == 0 ? $"Prick {{}} at {start}."
+            : Kit.ScaleStep is null ? "Prick {} through from the full-size plate."
+            : $"Measure {how} from {start} and prick {{}}.";
+        return bench.Locate(at, name, says, from);
     }
 
     private ScaleOpening ByScale(Real length) => new(length, Kit.ScaleStep is { } step ? Rounded(length, step) : null);

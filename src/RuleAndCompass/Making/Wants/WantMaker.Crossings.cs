@@ -49,7 +49,7 @@ internal sealed partial class WantMaker
         SourceSpan at = choice?.Span ?? want.Span;
         if (crossing.Points.Length == 1)
         {
-            if (choice is not null && choice.Kind is not (ChoiceKind.Nearest or ChoiceKind.FarthestFrom) && !Chosen(choice, crossing.Points[0], null, met))
+            if (choice is not null && !Chosen(choice, crossing.Points[0], null, met))
                 throw new FaultException(MakingFindings.OnlyCrossingFailsChoice(choice.ToString()!, $"it lies at {Place(crossing.Points[0])}", at));
             return bench.Cross(first, second, crossing.Points[0], 0, name);
         }
@@ -61,7 +61,38 @@ internal sealed partial class WantMaker
         if (one == other)
             throw new FaultException(one ? MakingFindings.ChoicePicksBoth(choice.ToString()!, candidates, at) : MakingFindings.ChoicePicksNeither(choice.ToString()!, candidates, at));
         int which = one ? 0 : 1;
-        return bench.Cross(first, second, crossing.Points[which], which, name, $", {choice}");
+        return bench.Cross(first, second, crossing.Points[which], which, name, Said(choice));
+    }
+
+    // The choice as it is said at the bench, with the names that stand on the stock.
+    private string Said(Choice choice)
+    {
+        string of = choice.Kind switch
+        {
+            ChoiceKind.LeftAlong or ChoiceKind.RightAlong or ChoiceKind.SameSide or ChoiceKind.Across => evaluator.Line(choice.Of).Directed.Mark.Name,
+            ChoiceKind.Inside or ChoiceKind.Outside => evaluator.Circle(choice.Of).Mark.Name,
+            _ => evaluator.Point(choice.Of).Mark.Name,
+        };
+        string from = choice.From is null ? "" : evaluator.Point(choice.From).Mark.Name;
+        return choice.Kind switch
+        {
+            ChoiceKind.Nearest => $", the one nearest {of}",
+            ChoiceKind.FarthestFrom => $", the one farthest from {of}",
+            ChoiceKind.OtherThan => $", not at {of} but at the other",
+            ChoiceKind.Above => $", above {of}",
+            ChoiceKind.Below => $", below {of}",
+            ChoiceKind.LeftOf => $", left of {of}",
+            ChoiceKind.RightOf => $", right of {of}",
+            ChoiceKind.LeftAlong => $", on the left as {of} runs",
+            ChoiceKind.RightAlong => $", on the right as {of} runs",
+            ChoiceKind.AheadOf => $", ahead of {of}",
+            ChoiceKind.Behind => $", behind {of}",
+            ChoiceKind.SameSide => $", on the same side of {of} as {from}",
+            ChoiceKind.Across => $", across {of} from {from}",
+            ChoiceKind.Inside => $", inside {of}",
+            ChoiceKind.Outside => $", outside {of}",
+            _ => throw new UnreachableException($"No words for {choice.Kind}."),
+        };
     }
 
     private void MustMeet(CurveMark first, CurveMark second, Crossing crossing, string firstName, string secondName, SourceSpan span)
@@ -102,9 +133,9 @@ internal sealed partial class WantMaker
         switch (choice.Kind)
         {
             case ChoiceKind.Nearest or ChoiceKind.FarthestFrom:
+                Point from = evaluator.Point(choice.Of).Point;
                 if (other is null)
                     return true;
-                Point from = evaluator.Point(choice.Of).Point;
                 // Equal squared distances pick neither.
                 int nearer = Decider.Sign(other.SquaredDistanceTo(from) - here.SquaredDistanceTo(from));
                 return choice.Kind == ChoiceKind.Nearest ? nearer > 0 : nearer < 0;

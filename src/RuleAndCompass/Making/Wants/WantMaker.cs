@@ -14,6 +14,11 @@ internal sealed partial class WantMaker(Evaluator evaluator, Workbench bench, Co
     public void Make(WantSentence want)
     {
         constructions.Serving = want.Span;
+        if (want.By is { } by && !Serves(by, want))
+            throw new FaultException(MakingFindings.NoTool($"`by {by.ToString().ToLowerInvariant()}` is no way to make it", "nothing: leave `by` out, or name another tool", want.Span) with
+            {
+                Hint = "leave `by …` out, or name another tool",
+            });
         switch (want)
         {
             case PrickAt at:
@@ -113,6 +118,19 @@ internal sealed partial class WantMaker(Evaluator evaluator, Workbench bench, Co
                 throw new UnreachableException($"No want of {want.GetType().Name}.");
         }
     }
+
+    // Which tools can make which wants in more than one way; what is laid or swung anyhow is made by dividers.
+    private static bool Serves(ByTool by, WantSentence want) => want switch
+    {
+        PrickAt => by == ByTool.Scale,
+        RuleSquare or PrickFoot or StrikeTouching or RuleTouchingAt => by is ByTool.Square or ByTool.Dividers || (by == ByTool.Protractor && want is RuleSquare),
+        RuleParallel or RuleBack or RuleToward => by is ByTool.Square or ByTool.Dividers,
+        RuleTurned or PrickTurned or PrickRound => by != ByTool.Square,
+        PrickOnAhead or PrickOnToward => by is ByTool.Dividers or ByTool.Scale,
+        PrickOnCircle => by is ByTool.Square or ByTool.Dividers,
+        RuleThrough => false,
+        _ => by == ByTool.Dividers,
+    };
 
     private void Bind(Bound bound, PointMark mark) => bind(bound, new PointValue(mark));
 

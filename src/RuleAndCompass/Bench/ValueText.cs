@@ -2,7 +2,7 @@ using System.Globalization;
 using System.Numerics;
 using RuleAndCompass.Numbers;
 
-namespace RuleAndCompass.Making;
+namespace RuleAndCompass.Bench;
 
 /// <summary>Values as a maker writes them.</summary>
 internal static class ValueText
@@ -83,6 +83,21 @@ internal static class ValueText
 
     /// <summary>The month's name; null outside 1 to 12.</summary>
     public static string? Month(Rational month) => month.IsInteger && month.Numerator >= 1 && month.Numerator <= 12 ? Months[(int)month.Numerator - 1] : null;
+
+    /// <summary>The size of an angle as it is set: <c>52°10'</c> where whole minutes say it, else <c>52.17°</c>.</summary>
+    public static string Set(Angle angle)
+    {
+        if (angle.TryGetDegrees(out Rational degrees))
+        {
+            Rational size = degrees.Abs(), minutes = (size - size.Floor()) * 60;
+            if (minutes.IsZero)
+                return $"{size.Floor()}°";
+            if (minutes.IsInteger)
+                return $"{size.Floor()}°{minutes.Numerator:00}'";
+        }
+
+        return $"{Decimals(Math.Abs(angle.ToDegreesDouble()), 2)}°";
+    }
 
     /// <summary>A double with at most so many decimals, without trailing zeros.</summary>
     public static string Decimals(double value, int most) => value.ToString("0." + new string('#', most), CultureInfo.InvariantCulture);
