@@ -32,7 +32,7 @@ internal static class Layouts
 
     // Hour lines by the tangent: the sine of the latitude is laid off, so that the figures come from the construction.
     public const string Dial = """
-        title "Slate for the wash-house at Carrow Holm"
+        title "Dial for the wash-house at Carrow Holm"
         sheet A4 upright
         kit straightedge 600 mm, dividers 2 mm to 180 mm, square, protractor, scale 1/2 mm
         given latitude = 50°

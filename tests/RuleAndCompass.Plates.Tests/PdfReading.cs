@@ -15,7 +15,7 @@ internal static class PdfReading
         return [.. document.GetPages()];
     }
 
-    /// <summary>The straight pieces that are stroked, by their ends.</summary>
+    /// <summary>The straight pieces that are stroked, by their ends. The reader gives widths in the page's own drawing unit, which is the millimetre.</summary>
     public static List<(double X1, double Y1, double X2, double Y2, double Width)> Lines(Page page)
     {
         List<(double, double, double, double, double)> lines = [];
@@ -27,7 +27,7 @@ internal static class PdfReading
                 {
                     if (command is PdfSubpath.Line line)
                     {
-                        lines.Add((X(line.From), Y(page, line.From), X(line.To), Y(page, line.To), path.LineWidth / PointsPerMillimetre));
+                        lines.Add((X(line.From), Y(page, line.From), X(line.To), Y(page, line.To), path.LineWidth));
                     }
                 }
             }
@@ -51,8 +51,14 @@ internal static class PdfReading
         }
     }
 
-    /// <summary>All words, one blank between.</summary>
-    public static string Text(Page page) => string.Join(' ', page.GetWords().Select(word => word.Text));
+    /// <summary>All letters in the order in which they were set, without blanks: lines that follow on read through.</summary>
+    public static string Text(Page page) => Closed(page.Text);
+
+    /// <summary>A text without its blanks.</summary>
+    public static string Closed(string text) => string.Concat(text.Where(sign => !char.IsWhiteSpace(sign)));
+
+    /// <summary>Says that a text stands on a page, wherever its lines break.</summary>
+    public static void ShouldTell(this string pageText, string text) => pageText.ShouldContain(Closed(text), Case.Sensitive);
 
     private static double X(PdfPoint point) => point.X / PointsPerMillimetre;
 

@@ -24,7 +24,7 @@ public sealed class StepPlatesTests
         string all = string.Join(' ', read.Select(PdfReading.Text));
         foreach (Stage stage in layout.Stages)
         {
-            all.ShouldContain(stage.Title);
+            all.ShouldTell(stage.Title);
         }
 
         foreach (Act act in layout.Acts)
@@ -51,15 +51,15 @@ public sealed class StepPlatesTests
 
         (page.Width / PdfReading.PointsPerMillimetre).ShouldBe(297, 0.001);
         (page.Height / PdfReading.PointsPerMillimetre).ShouldBe(210, 0.001);
-        text.ShouldContain("Slate for the wash-house at Carrow Holm");
-        text.ShouldContain("Stage 1: The noon line");
-        text.ShouldContain("Plate 1 of ");
-        text.ShouldContain("210 × 297 mm");
-        text.ShouldContain("ordinary");
-        text.ShouldContain("test.setout");
-        text.ShouldContain("latitude = 50°");
-        text.ShouldContain("seat the needle here");
-        text.ShouldContain("Never look at the sun.");
+        text.ShouldTell("Dial for the wash-house at Carrow Holm");
+        text.ShouldTell("Stage 1: The noon line");
+        text.ShouldTell("Plate 1 of ");
+        text.ShouldTell("210 × 297 mm");
+        text.ShouldTell("ordinary");
+        text.ShouldTell("test.setout");
+        text.ShouldTell("latitude = 50°");
+        text.ShouldTell("seat the needle here");
+        text.ShouldTell("Never look at the sun.");
         PdfReading.Lines(page).ShouldContain(line => Math.Abs(line.X2 - line.X1 - 50) < 0.0001 && Math.Abs(line.Y1 - line.Y2) < 1e-6);
     }
 
@@ -132,8 +132,8 @@ public sealed class StepPlatesTests
         string all = string.Join(' ', PdfReading.Pages(PdfWriter.Write(StepPlates.Compose(Layouts.Of(Layouts.Gate)), "Gate")).Select(PdfReading.Text));
 
         // Two circles of one radius, each through the other's centre, cross at 60°: 120° between their radii.
-        all.ShouldContain("at 60°");
-        all.ShouldContain("at 90°");
+        all.ShouldTell("at 60°");
+        all.ShouldTell("at 90°");
     }
 
     [Theory]
