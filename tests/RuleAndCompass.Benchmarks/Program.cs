@@ -3,5 +3,8 @@ using RuleAndCompass.Benchmarks.Exact;
 if (args.Length > 0 && args[0] == "exact")
     return ExactBenchmark.Run(args.AsSpan(1));
 
-Console.Error.WriteLine("usage: exact WORKLOAD [SIZE]");
+if (args.Length > 0 && args[0] == "fuzz-numbers")
+    return NumberFuzz.Run(args.AsSpan(1));
+
+Console.Error.WriteLine("usage: exact WORKLOAD [SIZE] | fuzz-numbers [COUNT [SEED]]");
 return 2;

@@ -38,6 +38,22 @@ internal static class Clipping
         }
     }
 
+    /// <summary>Whether a straight piece and a box share anything.</summary>
+    public static bool Touches(Spot from, Spot to, Box box)
+    {
+        if (Math.Max(from.X, to.X) < box.Left || Math.Min(from.X, to.X) > box.Right || Math.Max(from.Y, to.Y) < box.Top || Math.Min(from.Y, to.Y) > box.Bottom)
+        {
+            return false;
+        }
+
+        // The line parts the corners, or it does not touch.
+        double dx = to.X - from.X, dy = to.Y - from.Y;
+        double a = Side(box.Left, box.Top), b = Side(box.Right, box.Top), c = Side(box.Left, box.Bottom), d = Side(box.Right, box.Bottom);
+        return !((a > 0 && b > 0 && c > 0 && d > 0) || (a < 0 && b < 0 && c < 0 && d < 0));
+
+        double Side(double x, double y) => (dx * (y - from.Y)) - (dy * (x - from.X));
+    }
+
     /// <summary>The parts of an arc in the box, in order.</summary>
     public static IEnumerable<ArcSpan> Arc(Spot centre, double radius, ArcSpan arc, Box box)
     {

@@ -18,13 +18,14 @@ internal sealed class FullSizeComposer
     private const double KeepOffEdge = 8;
 
     // ISO 3098 heights of capitals.
-    private const double TitleHeight = 5;
+    private const double TitleHeight = 3.5;
     private const double WordHeight = 2.5;
     private const double NameHeight = 1.8;
 
     private const double CrossReach = 2.6;
     private const double CrossClear = 0.7;
     private const double SpanRowHeight = 8;
+    private const double NameGap = 1.4;
 
     private static readonly double titleSize = Face.SizeForCapitals(TitleHeight);
     private static readonly double wordSize = Face.SizeForCapitals(WordHeight);
@@ -92,11 +93,12 @@ internal sealed class FullSizeComposer
             }
         }
 
-        List<(Spot At, string Name)> pricks = [.. Pricks(view)];
+        List<(Spot At, string Name)> pricks = Pricks(view);
         foreach ((Spot at, _) in pricks)
         {
             Cross(canvas, at);
-            placement.Block(new Box(at.X, at.Y, at.X, at.Y).Grown(CrossReach), always);
+            placement.Block(at.Moved(-CrossReach, 0), at.Moved(CrossReach, 0), always);
+            placement.Block(at.Moved(0, -CrossReach), at.Moved(0, CrossReach), always);
         }
 
         // Bars and words first, since a name finds room more easily.
@@ -112,7 +114,7 @@ internal sealed class FullSizeComposer
             {
                 string shown = Typesetting.Fit(name, Typeface.Text, nameSize, 60);
                 (double width, double height) = Canvas.LabelSize(shown, Typeface.Text, nameSize);
-                PlacedLabel label = placement.Place(LabelPlacement.Around(at, width, height, 1.6), always);
+                PlacedLabel label = placement.Place(LabelPlacement.Around(at, width, height, NameGap), always);
                 canvas.Label(Role.Name, shown, label.Box, Typeface.Text, nameSize, Ink.Black);
             }
         }
@@ -146,7 +148,7 @@ internal sealed class FullSizeComposer
 
     // What has to go through onto the stock: the ends and centres of what is kept, points to be drilled, and points that no scale can measure; all named
     // points where nothing is kept or construction is shown.
-    private IEnumerable<(Spot At, string Name)> Pricks(View view)
+    private List<(Spot At, string Name)> Pricks(View view)
     {
         Dictionary<Point, string> names = new(ReferenceEqualityComparer.Instance);
         Dictionary<(long, long), int> places = [];
@@ -239,8 +241,9 @@ internal sealed class FullSizeComposer
     private bool InFreeRoom(Canvas canvas, LabelPlacement placement, Box page)
     {
         List<string> lines = WordLines(90, isSheet: true);
-        double wordsHeight = 9 + (lines.Count * 4);
-        double wordsWidth = Math.Max(lines.Max(line => Typesetting.Width(line, Typeface.Text, wordSize)), Math.Min(90, Typesetting.Width(layout.Title, Typeface.Strong, titleSize)));
+        List<string> title = TitleLines(90);
+        double wordsHeight = (title.Count * 5.5) + 2 + (lines.Count * 4);
+        double wordsWidth = Math.Max(lines.Max(line => Typesetting.Width(line, Typeface.Text, wordSize)), title.Max(line => Typesetting.Width(line, Typeface.Strong, titleSize)));
         if (FreeRoom(placement, page, wordsWidth + 4, wordsHeight + 4) is not { } words)
         {
             return false;
@@ -259,7 +262,7 @@ internal sealed class FullSizeComposer
         }
 
         Block(along);
-        Write(canvas, lines, new Spot(words.Left + 2, words.Top + 2), 90);
+        Write(canvas, title, lines, new Spot(words.Left + 2, words.Top + 2));
         Bar(canvas, new Spot(across.Left + 3, across.Top + 9), true);
         Bar(canvas, new Spot(along.Left + 9, along.Top + 3), false);
         return true;
@@ -272,7 +275,7 @@ internal sealed class FullSizeComposer
         double top = Math.Max(sheet.Bottom, Margin + BarLength) + Margin;
         Bar(canvas, new Spot(page.Right - Margin, Margin), false);
         Bar(canvas, new Spot(Margin, top + 10), true);
-        Write(canvas, WordLines(100, isSheet: false), new Spot(Margin + BarLength + 10, top), 100);
+        Write(canvas, TitleLines(100), WordLines(100, isSheet: false), new Spot(Margin + BarLength + 10, top));
         placement.Block(new Box(0, sheet.Bottom + 1, page.Right, page.Bottom), PlateSet.AllFrom(0));
         double y = top + StripHeight - 2;
         foreach ((double length, string says) in spans)
@@ -304,10 +307,20 @@ internal sealed class FullSizeComposer
         return [.. words.SelectMany(each => Typesetting.Break(each, Typeface.Text, wordSize, measure))];
     }
 
-    private void Write(Canvas canvas, List<string> lines, Spot at, double measure)
+    private List<string> TitleLines(double measure)
     {
-        canvas.Write(Role.Text, Typesetting.Fit(layout.Title, Typeface.Strong, titleSize, measure), at.Moved(0, TitleHeight), Typeface.Strong, titleSize);
-        double y = TitleHeight + 6;
+        List<string> lines = Typesetting.Break(layout.Title, Typeface.Strong, titleSize, measure);
+        return lines.Count <= 2 ? [.. lines.DefaultIfEmpty("")] : [lines[0], Typesetting.Fit(string.Join(' ', lines.Skip(1)), Typeface.Strong, titleSize, measure)];
+    }
+
+    private static void Write(Canvas canvas, List<string> title, List<string> lines, Spot at)
+    {
+        double y = TitleHeight;
+        foreach (string line in title)
+        {
+            canvas.Write(Role.Text, line, at.Moved(0, y), Typeface.Strong, titleSize);
+            y += 5.5;
+        }
         foreach (string line in lines)
         {
             canvas.Write(Role.Text, line, at.Moved(0, y), Typeface.Text, wordSize);

@@ -64,8 +64,9 @@ internal sealed class LabelPlacement(Box window)
     private const double LabelCost = 200;
     private const double OutsideCost = 2000;
 
-    private readonly double cellMillimetres = Math.Max(SmallestCellMillimetres, Math.Max(window.Width, window.Height) / CellsAcross);
-    private readonly Dictionary<(int X, int Y), List<int>> cells = [];
+    private readonly double cellMillimetres = CellSize(window);
+    private readonly int columns = CellCount(window.Width, window);
+    private readonly List<int>?[] cells = new List<int>?[CellCount(window.Width, window) * CellCount(window.Height, window)];
     private readonly List<Obstacle> obstacles = [];
     private int[] seen = [];
     private int asked;
@@ -82,12 +83,12 @@ internal sealed class LabelPlacement(Box window)
 
         int number = Add(new(inside.From, inside.To, default, true, plates));
         int steps = 1 + (int)(inside.From.DistanceTo(inside.To) / (cellMillimetres / 4));
-        (int, int) last = (int.MinValue, 0);
+        int last = -1;
         for (int i = 0; i <= steps; i++)
         {
             double part = (double)i / steps;
             Spot at = inside.From.Moved(part * (inside.To.X - inside.From.X), part * (inside.To.Y - inside.From.Y));
-            if (Cell(at) is var cell && cell != last)
+            if (Column(at.X) + (Row(at.Y) * columns) is var cell && cell != last)
             {
                 Enter(cell, number);
                 last = cell;
@@ -133,9 +134,13 @@ internal sealed class LabelPlacement(Box window)
     public void Block(Box box, PlateSet plates)
     {
         int number = Add(new(default, default, box, false, plates));
-        foreach ((int X, int Y) cell in CellsOf(box))
+        (int left, int right, int top, int bottom) = (Column(box.Left), Column(box.Right), Row(box.Top), Row(box.Bottom));
+        for (int row = top; row <= bottom; row++)
         {
-            Enter(cell, number);
+            for (int column = left; column <= right; column++)
+            {
+                Enter(column + (row * columns), number);
+            }
         }
     }
 
@@ -210,32 +215,37 @@ internal sealed class LabelPlacement(Box window)
         }
 
         asked++;
-        foreach ((int X, int Y) cell in CellsOf(box))
+        (int left, int right, int top, int bottom) = (Column(box.Left), Column(box.Right), Row(box.Top), Row(box.Bottom));
+        for (int row = top; row <= bottom; row++)
         {
-            if (!cells.TryGetValue(cell, out List<int>? here))
+            for (int column = left; column <= right && cost < giveUpAt; column++)
+            {
+                if (cells[column + (row * columns)] is { } here)
+                {
+                    cost += Cost(here, box, plates);
+                }
+            }
+        }
+
+        return cost;
+    }
+
+    private double Cost(List<int> here, Box box, PlateSet plates)
+    {
+        double cost = 0;
+        foreach (int number in here)
+        {
+            if (seen[number] == asked)
             {
                 continue;
             }
 
-            foreach (int number in here)
+            seen[number] = asked;
+            Obstacle obstacle = obstacles[number];
+            bool touches = obstacle.IsLine ? Clipping.Touches(obstacle.From, obstacle.To, box) : obstacle.Box.Overlaps(box);
+            if (touches && obstacle.Plates.Meets(plates))
             {
-                if (cost >= giveUpAt)
-                {
-                    return cost;
-                }
-
-                if (seen[number] == asked)
-                {
-                    continue;
-                }
-
-                seen[number] = asked;
-                Obstacle obstacle = obstacles[number];
-                bool touches = obstacle.IsLine ? Clipping.Line(obstacle.From, obstacle.To, box) is not null : obstacle.Box.Overlaps(box);
-                if (touches && obstacle.Plates.Meets(plates))
-                {
-                    cost += obstacle.IsLine ? LineCost : LabelCost;
-                }
+                cost += obstacle.IsLine ? LineCost : LabelCost;
             }
         }
 
@@ -248,28 +258,14 @@ internal sealed class LabelPlacement(Box window)
         return obstacles.Count - 1;
     }
 
-    private void Enter((int X, int Y) cell, int number)
-    {
-        if (!cells.TryGetValue(cell, out List<int>? here))
-        {
-            cells.Add(cell, here = []);
-        }
+    private void Enter(int cell, int number) => (cells[cell] ??= []).Add(number);
 
-        here.Add(number);
-    }
+    // What lies outside the window counts to the nearest cell in it.
+    private int Column(double x) => Math.Clamp((int)((x - window.Left) / cellMillimetres), 0, columns - 1);
 
-    private (int X, int Y) Cell(Spot spot) => ((int)Math.Floor(spot.X / cellMillimetres), (int)Math.Floor(spot.Y / cellMillimetres));
+    private int Row(double y) => Math.Clamp((int)((y - window.Top) / cellMillimetres), 0, (cells.Length / columns) - 1);
 
-    private IEnumerable<(int X, int Y)> CellsOf(Box box)
-    {
-        (int left, int top) = Cell(new(box.Left, box.Top));
-        (int right, int bottom) = Cell(new(box.Right, box.Bottom));
-        for (int x = left; x <= right; x++)
-        {
-            for (int y = top; y <= bottom; y++)
-            {
-                yield return (x, y);
-            }
-        }
-    }
+    private static double CellSize(Box window) => Math.Max(SmallestCellMillimetres, Math.Max(window.Width, window.Height) / CellsAcross);
+
+    private static int CellCount(double length, Box window) => 1 + (int)(Math.Max(0, length) / CellSize(window));
 }

@@ -3,10 +3,10 @@ using System.Globalization;
 namespace RuleAndCompass.Plates.Composition;
 
 /// <summary>A drawing's scale: so many millimetres on the page for so many on the stock.</summary>
-/// <remarks>The steps 1, 2 and 5 with their tens are those of ISO 5455; 2.5 stands between them by common practice.</remarks>
+/// <remarks>The steps 1, 2 and 5 with their tens are those of ISO 5455; 2.5 and 4 stand between them by common practice.</remarks>
 internal readonly record struct PlateScale(double OnPage, double OnStock)
 {
-    private static readonly double[] steps = [1, 2, 2.5, 5];
+    private static readonly double[] steps = [1, 2, 2.5, 4, 5];
 
     public double Factor => OnPage / OnStock;
 

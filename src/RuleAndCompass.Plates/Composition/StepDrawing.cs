@@ -33,8 +33,10 @@ internal sealed class StepDrawing
     private readonly LabelPlacement placement;
     private readonly Dictionary<Mark, (string Text, PlacedLabel Label)> names = new(ReferenceEqualityComparer.Instance);
 
-    // Per act, the marks its sentence speaks of.
+    // Both by the act's number. What is kept stands from an act on.
     private readonly int[] plateOfAct;
+    private readonly Outline[][] strokes;
+    private readonly List<(int From, Item Item)> keptWork = [];
 
     public StepDrawing(
         Layout layout, Tracing tracing, View view, IReadOnlyList<PlatePlan> plans, Dictionary<Point, int> actOfPoint, CancellationToken cancellation)
@@ -47,6 +49,7 @@ internal sealed class StepDrawing
         this.cancellation = cancellation;
         placement = new(view.Window);
         plateOfAct = new int[layout.Acts.Length + 1];
+        strokes = new Outline[layout.Acts.Length + 1][];
         foreach (PlatePlan plan in plans)
         {
             for (int i = plan.First; i < plan.End; i++)
@@ -55,6 +58,7 @@ internal sealed class StepDrawing
             }
         }
 
+        ShapeKept();
         BlockStrokes();
         BlockSigns();
         PlaceNames();
@@ -148,7 +152,7 @@ internal sealed class StepDrawing
 
             if (plateOfAct[trace.Act] == plan.Index == present)
             {
-                foreach (Outline outline in view.Strokes(trace, Past))
+                foreach (Outline outline in strokes[trace.Act])
                 {
                     canvas.Draw(present ? Role.Present : Role.Earlier, outline, present ? Pens.Present : Pens.Earlier);
                 }
@@ -159,26 +163,29 @@ internal sealed class StepDrawing
     private void KeptWork(Canvas canvas, PlatePlan plan, int last)
     {
         bool isLast = plan.Index == plans.Count - 1;
+        foreach ((int from, Item item) in keptWork)
+        {
+            if (isLast || from <= last)
+            {
+                canvas.Add(item);
+            }
+        }
+    }
+
+    private void ShapeKept()
+    {
         foreach (Kept kept in layout.Kept)
         {
-            if (isLast || StandsAt(kept) <= last)
-            {
-                foreach (Outline outline in KeptShape.Outlines(kept, view))
-                {
-                    canvas.Draw(Role.Kept, outline, Pens.Standing(kept.Dash));
-                }
-            }
+            cancellation.ThrowIfCancellationRequested();
+            int from = StandsAt(kept);
+            Pen pen = Pens.Standing(kept.Dash);
+            keptWork.AddRange(KeptShape.Outlines(kept, view).Select(outline => (from, (Item)new Stroke(Role.Kept, outline, pen))));
         }
 
         foreach (Lettering lettering in layout.Letterings)
         {
-            if (isLast || actOfPoint.GetValueOrDefault(lettering.At, int.MaxValue) <= last)
-            {
-                foreach (Words words in KeptShape.Letters(lettering, view))
-                {
-                    canvas.Add(words);
-                }
-            }
+            int from = actOfPoint.GetValueOrDefault(lettering.At, int.MaxValue);
+            keptWork.AddRange(KeptShape.Letters(lettering, view).Select(words => (from, (Item)words)));
         }
     }
 
@@ -447,11 +454,13 @@ internal sealed class StepDrawing
             if (trace is PointTrace point)
             {
                 Spot at = view.OnPage(point.At);
+                strokes[trace.Act] = [];
                 placement.Block(new Box(at.X - 0.4, at.Y - 0.4, at.X + 0.4, at.Y + 0.4), plates);
                 continue;
             }
 
-            foreach (Outline outline in view.Strokes(trace, Past))
+            strokes[trace.Act] = [.. view.Strokes(trace, Past)];
+            foreach (Outline outline in strokes[trace.Act])
             {
                 placement.Block(outline, plates);
             }

@@ -20,6 +20,7 @@ internal sealed class StepPlateComposer
     private const double SmallestFactorOnA4 = 0.1;
     private const double OverEdge = 3;
     private const int MostMoved = 5;
+    private const double NumberGap = 2.2;
     private const double RoomRoundUsed = 0.06;
 
     private readonly Layout layout;
@@ -58,11 +59,13 @@ internal sealed class StepPlateComposer
             format = PlateFormat.A3;
         }
 
-        // The whole sheet, unless the part with work on it can be shown larger.
+        // The whole sheet, unless the part with work on it can be shown larger; never larger than life for that.
         scale = ScaleOn(format, needed);
-        if (ScaleOn(format, used).Factor > scale.Factor)
+        PlateScale larger = ScaleOn(format, used);
+        larger = larger.Factor > 1 ? new PlateScale(1, 1) : larger;
+        if (larger.Factor > scale.Factor)
         {
-            scale = ScaleOn(format, used);
+            scale = larger;
             needed = used;
         }
 
@@ -273,14 +276,20 @@ internal sealed class StepPlateComposer
 
     private static double HeaderBottom(int titleLines) => PlateFormat.Margin + 4 + (titleLines * PlateFormat.TitleLeading) + 8;
 
+    // The stage's number hangs left of its title, as an act's number does; a long one pushes the title in.
+    private double TitleLeft(int stage) => Math.Max(format.SentenceLeft, format.ColumnLeft + Typesetting.Width(StageNumber(stage), Typeface.Strong, PlateFormat.TitleSize) + NumberGap);
+
+    private string StageNumber(int stage) => layout.Stages.IsDefaultOrEmpty ? "" : Typesetting.Fit(layout.Stages[stage].Number, Typeface.Strong, PlateFormat.TitleSize, PlateFormat.NumberWidth * 3);
+
     private List<string> TitleLines(int stage)
     {
+        double measure = format.ColumnRight - TitleLeft(stage);
         List<string> lines = layout.Stages.IsDefaultOrEmpty
-            ? Typesetting.Break(layout.Title, Typeface.Strong, PlateFormat.TitleSize, format.Measure)
-            : Typesetting.Break(layout.Stages[stage].Title, Typeface.Strong, PlateFormat.TitleSize, format.Measure);
+            ? Typesetting.Break(layout.Title, Typeface.Strong, PlateFormat.TitleSize, measure)
+            : Typesetting.Break(layout.Stages[stage].Title, Typeface.Strong, PlateFormat.TitleSize, measure);
         if (lines.Count > 3)
         {
-            lines = [lines[0], lines[1], Typesetting.Fit(string.Join(' ', lines.Skip(2)), Typeface.Strong, PlateFormat.TitleSize, format.Measure)];
+            lines = [lines[0], lines[1], Typesetting.Fit(string.Join(' ', lines.Skip(2)), Typeface.Strong, PlateFormat.TitleSize, measure)];
         }
 
         return lines;
@@ -289,20 +298,18 @@ internal sealed class StepPlateComposer
     private double Header(Canvas canvas, PlatePlan plan)
     {
         double y = PlateFormat.Margin + 2.4;
-        canvas.Write(Role.Text, Typesetting.Fit(layout.Title, Typeface.Text, PlateFormat.NoteSize, format.ColumnWidth), new(format.SentenceLeft, y), Typeface.Text, PlateFormat.NoteSize, ink: Ink.Grey);
+        canvas.Write(Role.Text, Typesetting.Fit(layout.Title, Typeface.Text, PlateFormat.NoteSize, format.Measure), new(format.SentenceLeft, y), Typeface.Text, PlateFormat.NoteSize, ink: Ink.Grey);
         List<string> lines = TitleLines(plan.Stage);
+        double left = TitleLeft(plan.Stage);
         y = PlateFormat.Margin + 4;
         foreach (string line in lines)
         {
             y += PlateFormat.TitleLeading;
-            canvas.Write(Role.Text, line, new(format.SentenceLeft, y - 1), Typeface.Strong, PlateFormat.TitleSize);
+            canvas.Write(Role.Text, line, new(left, y - 1), Typeface.Strong, PlateFormat.TitleSize);
         }
 
-        if (!layout.Stages.IsDefaultOrEmpty)
-        {
-            string number = Typesetting.Fit(layout.Stages[plan.Stage].Number, Typeface.Strong, PlateFormat.TitleSize, PlateFormat.NumberWidth * 2);
-            canvas.Write(Role.Text, number, new(format.SentenceLeft - 2.2, PlateFormat.Margin + 4 + PlateFormat.TitleLeading - 1), Typeface.Strong, PlateFormat.TitleSize, Anchor.Right);
-        }
+        canvas.Write(
+            Role.Text, StageNumber(plan.Stage), new(left - NumberGap, PlateFormat.Margin + 4 + PlateFormat.TitleLeading - 1), Typeface.Strong, PlateFormat.TitleSize, Anchor.Right);
 
         double rule = y + 2;
         canvas.Line(Role.Frame, new(format.ColumnLeft, rule), new(format.ColumnRight, rule), Pens.Rule);
@@ -321,7 +328,7 @@ internal sealed class StepPlateComposer
                 if (isFirstLine && block.Number is { } number)
                 {
                     canvas.Write(
-                        Role.Text, number.ToString(CultureInfo.InvariantCulture), new(format.SentenceLeft - 2.2, baseLine), Typeface.Strong, line.Size, Anchor.Right, Ink.Accent);
+                        Role.Text, number.ToString(CultureInfo.InvariantCulture), new(format.SentenceLeft - NumberGap, baseLine), Typeface.Strong, line.Size, Anchor.Right, Ink.Accent);
                 }
 
                 isFirstLine = false;
@@ -416,6 +423,11 @@ internal sealed class StepPlateComposer
             {
                 if (layout.Acts[trace.Act - 1].Stage == stage)
                 {
+                    if (trace is PointTrace point && box.Holds(small.OnPage(point.At)))
+                    {
+                        canvas.Fill(Role.Thumbnail, Outline.Circle(small.OnPage(point.At), 0.22), Ink.Black);
+                    }
+
                     foreach (Outline outline in small.Strokes(trace, 0))
                     {
                         canvas.Draw(Role.Thumbnail, outline, Pens.Thin);

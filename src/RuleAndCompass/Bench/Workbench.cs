@@ -1,3 +1,4 @@
+using System.Diagnostics;
 using System.Globalization;
 using RuleAndCompass.Geometry;
 using RuleAndCompass.Language.Diagnostics;
@@ -53,12 +54,14 @@ internal sealed class Workbench(Kit kit, Decider decider, IReadOnlySet<string> u
         file = inFile;
     }
 
-    public PointMark Locate(Point at, string? name, string says)
+    /// <summary>Pricks a measured point.</summary>
+    /// <param name="from">The mark it is measured from; null for the middle of the sheet.</param>
+    public PointMark Locate(Point at, string? name, string says, PointMark? from = null)
     {
         if (index.Find(at) is { } standing)
             return standing;
         PointMark made = new(name ?? Generate('p'), at, name is null);
-        return Done(made, new Locate(Next(), stage, want, made, kit.ScaleStep is not null, says.Replace("{}", made.Name, StringComparison.Ordinal), span, file));
+        return Done(made, new Locate(Next(), stage, want, made, kit.ScaleStep is not null, says.Replace("{}", made.Name, StringComparison.Ordinal), span, file) { From = from });
     }
 
     /// <summary>The line from one mark to another, which the caller has decided to be two points.</summary>
@@ -110,7 +113,8 @@ internal sealed class Workbench(Kit kit, Decider decider, IReadOnlySet<string> u
             SpanOpening between => $"Set the {tool} to the span from {between.First.Name} to {between.Second.Name} ({millimetres} mm).",
             ScaleOpening { Setting: { } setting } => $"Set the {tool} to {setting} mm by the scale.",
             ScaleOpening => $"Set the {tool} to {millimetres} mm, taken off the full-size plate.",
-            _ => $"Set the {tool} to about {millimetres} mm; any opening near it will do.",
+            FreeOpening free => $"Set the {tool} to about {ValueText.Plain(free.Chosen)} mm; any opening near it will do.",
+            _ => throw new UnreachableException($"No words for {opening.GetType().Name}."),
         };
         SetOpening set = new(Next(), stage, want, opening, beam, says, span, file);
         acts.Add(set);

@@ -51,6 +51,6 @@ internal static class Binding
     /// <summary>Every name bound anywhere in the sentences.</summary>
     public static ImmutableHashSet<string> NamesIn(IEnumerable<Sentence> sentences) => sentences.SelectMany(Of).Select(bound => bound.Name.Text).ToImmutableHashSet(StringComparer.Ordinal);
 
-    // A family that failed leaves its name, whatever the index.
-    private static Bound One(Many many) => new(many.Name, [many.From], many.Span);
+    // Several at once: no single index tells which.
+    private static Bound One(Many many) => new(many.Name, [many.From, many.To], many.Span);
 }

@@ -9,7 +9,6 @@ namespace RuleAndCompass.Making;
 /// <summary>Sets what the construction made beside what the formula says.</summary>
 internal sealed class ComparisonMaker(Evaluator evaluator, Decider decider)
 {
-
     public Comparison Compare(CompareSentence sentence, SourceSpan? followed, Action<Diagnostic> add)
     {
         string label = sentence.Label is null ? evaluator.Labelled(sentence.Constructed).ToString()! : evaluator.Text(sentence.Label);
@@ -134,6 +133,8 @@ internal sealed class ComparisonMaker(Evaluator evaluator, Decider decider)
         {
             if (tolerance is not QuantityValue { Dimension: 0 } minutes)
                 throw new FaultException(MakingFindings.WrongKind(within.ToString()!, tolerance.KindWithArticle, "a number of minutes", within.Span));
+            if (decider.Sign(minutes.Amount) < 0)
+                throw new FaultException(MakingFindings.BadComparison("the tolerance is less than nothing", within.Span, "write how far the two may differ either way"));
             if (comparison.TimedBy is null)
                 throw new FaultException(MakingFindings.BadComparison("minutes of time need `timed by`", within.Span, "name the variable that counts hours: `timed by h`"));
             bool inTime = comparison.Decision.IsZero || comparison.MinutesOfTime is not { } size || Math.Abs(size) <= minutes.Amount.ToDouble();
@@ -148,6 +149,8 @@ internal sealed class ComparisonMaker(Evaluator evaluator, Decider decider)
             (_, QuantityValue { IsNothing: true }) => Real.Zero,
             _ => throw new FaultException(MakingFindings.BadComparison($"the tolerance is {tolerance.KindWithArticle}, and the comparison is of {KindWord(comparison.Kind)}", within.Span)),
         };
+        if (decider.Sign(allowed) < 0)
+            throw new FaultException(MakingFindings.BadComparison("the tolerance is less than nothing", within.Span, "write how far the two may differ either way"));
         bool within1 = comparison.Decision.IsZero || (decider.Sign(comparison.Difference - allowed) <= 0 && decider.Sign(comparison.Difference + allowed) >= 0);
         return comparison with { Within = allowed, InTolerance = within1 };
     }

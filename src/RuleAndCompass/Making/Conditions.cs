@@ -54,6 +54,7 @@ internal sealed class Conditions(Evaluator evaluator, Decider decider)
 
     private (bool? Holds, Verdict Verdict) Test(Test test)
     {
+        ByHowMuch = null;
         (bool? holds, Verdict verdict) = test switch
         {
             RelationTest relation => Relation(relation),
@@ -89,16 +90,9 @@ internal sealed class Conditions(Evaluator evaluator, Decider decider)
             case (PointValue a, PointValue b) when test.Relation == Language.Syntax.Relation.Equal:
                 return SamePoint(a, b);
             case (LineValue a, LineValue b) when test.Relation == Language.Syntax.Relation.Equal:
-                return ReferenceEquals(a.Directed.Mark, b.Directed.Mark)
-                    ? (true, Verdict.Proved)
-                    : Both(decider.Decide(Vector.Cross(a.Direction, b.Direction)), decider.Decide(a.Directed.Mark.Line.SideOf(b.Start)));
+                return SameLine(a, b);
             case (CircleValue a, CircleValue b) when test.Relation == Language.Syntax.Relation.Equal:
-                if (ReferenceEquals(a.Mark, b.Mark))
-                    return (true, Verdict.Proved);
-                (bool? sameCentre, Verdict centreVerdict) = Both(
-                    decider.Decide(a.Mark.Circle.Centre.X - b.Mark.Circle.Centre.X), decider.Decide(a.Mark.Circle.Centre.Y - b.Mark.Circle.Centre.Y));
-                Decision radii = decider.Decide(a.Mark.Circle.RadiusSquared - b.Mark.Circle.RadiusSquared);
-                return sameCentre == false ? (false, centreVerdict) : (radii.Verdict.IsDecided && sameCentre is not null ? radii.Sign == 0 : null, Weaker(centreVerdict, radii.Verdict));
+                return SameCircle(a, b);
             default:
                 throw new FaultException(MakingFindings.KindsDoNotFit(left.KindWithArticle, "compared with", right.KindWithArticle, test.Span,
                     left is PointValue or LineValue or CircleValue ? "figures are compared by `=` only" : null));
@@ -132,6 +126,69 @@ internal sealed class Conditions(Evaluator evaluator, Decider decider)
         return (same, verdict);
     }
 
+    private (bool? Holds, Verdict Verdict) SameLine(LineValue a, LineValue b)
+    {
+        if (ReferenceEquals(a.Directed.Mark, b.Directed.Mark))
+            return (true, Verdict.Proved);
+        Decision parallel = decider.Decide(Vector.Cross(a.Direction, b.Direction));
+        Real off = a.Directed.Mark.Line.SideOf(b.Start);
+        (bool? same, Verdict verdict) = Both(parallel, decider.Decide(off));
+        if (same == false)
+            ByHowMuch = parallel.Sign != 0
+                ? $"they run at {Figure(Angle.OfVector(Vector.Dot(a.Direction, b.Direction), Vector.Cross(a.Direction, b.Direction)).Degrees, size: true)}° to each other"
+                : $"they are parallel, {Figure(off / a.Directed.Mark.Line.DirectionLength, size: true)} mm apart";
+        return (same, verdict);
+    }
+
+    private (bool? Holds, Verdict Verdict) SameCircle(CircleValue a, CircleValue b)
+    {
+        if (ReferenceEquals(a.Mark, b.Mark))
+            return (true, Verdict.Proved);
+        Circle first = a.Mark.Circle, second = b.Mark.Circle;
+        (bool? concentric, Verdict centres) = Both(decider.Decide(first.Centre.X - second.Centre.X), decider.Decide(first.Centre.Y - second.Centre.Y));
+        (bool? equal, Verdict radii) = Zero(first.RadiusSquared - second.RadiusSquared);
+        if (concentric == false || equal == false)
+        {
+            ByHowMuch = concentric == false ? $"their centres are {Figure(first.Centre.DistanceTo(second.Centre))} mm apart" : $"their radii differ by {Figure(first.Radius - second.Radius, size: true)} mm";
+            return (false, Verdict.Proved);
+        }
+
+        return (concentric is null || equal is null ? null : true, Weaker(centres, radii));
+    }
+
+    private (bool? Holds, Verdict Verdict) Meets(Curve a, Curve b)
+    {
+        Crossing crossing = Crossing.Of(a, b, decider);
+        if (crossing.Meeting == Meeting.Apart)
+            ByHowMuch = (a, b) switch
+            {
+                (Line first, Line second) => $"they are parallel, {Figure(first.SideOf(second.Start) / first.DirectionLength, size: true)} mm apart",
+                (Line line, Circle circle) => Gap(line, circle),
+                (Circle circle, Line line) => Gap(line, circle),
+                (Circle first, Circle second) => Gap(first, second),
+                _ => null,
+            };
+        // That they touch, or are the same, rests on a zero, which may be known less surely than a sign.
+        return crossing.Meeting == Meeting.Touching
+            ? (true, (a, b) switch
+            {
+                (Line line, Circle circle) => Touches(line, circle).Verdict,
+                (Circle circle, Line line) => Touches(line, circle).Verdict,
+                (Circle first, Circle second) => Touches(first, second).Verdict,
+                _ => Verdict.Proved,
+            })
+            : (crossing.Meeting != Meeting.Apart, Verdict.Proved);
+    }
+
+    private static string Gap(Line line, Circle circle) =>
+        $"they are {Figure(Math.Abs((line.SideOf(circle.Centre) / line.DirectionLength).ToDouble()) - circle.Radius.ToDouble())} mm apart";
+
+    private static string Gap(Circle a, Circle b)
+    {
+        double between = a.Centre.DistanceTo(b.Centre).ToDouble(), r = a.Radius.ToDouble(), s = b.Radius.ToDouble();
+        return $"they are {Figure(between > r + s ? between - r - s : Math.Abs(r - s) - between)} mm apart";
+    }
+
     private (bool? Holds, Verdict Verdict) Figures(FigureTest test)
     {
         Value left = evaluator.Resolve(test.Left), right = evaluator.Resolve(test.Right);
@@ -154,8 +211,7 @@ internal sealed class Conditions(Evaluator evaluator, Decider decider)
             case (FigureRelation.Touches, CircleValue a, CircleValue b):
                 return Touches(a.Mark.Circle, b.Mark.Circle);
             case (FigureRelation.Meets, LineValue or CircleValue, LineValue or CircleValue):
-                Meeting meeting = Crossing.Of(CurveOf(left), CurveOf(right), decider).Meeting;
-                return (meeting != Meeting.Apart, Verdict.Proved);
+                return Meets(CurveOf(left), CurveOf(right));
             default:
                 throw new FaultException(MakingFindings.KindsDoNotFit(left.KindWithArticle, test.Relation switch
                 {
@@ -205,7 +261,11 @@ internal sealed class Conditions(Evaluator evaluator, Decider decider)
         // (d² − r² − s²)² = 4 r² s² where the circles touch, within or without; one circle alone would satisfy it with d = 0.
         (bool? holds, Verdict verdict) = Zero((rest * rest) - (4 * a.RadiusSquared * b.RadiusSquared));
         if (holds == true && decider.IsZero(between))
+        {
+            ByHowMuch = "they are one circle";
             return (false, verdict);
+        }
+
         if (holds == false)
             ByHowMuch = $"the centres are {Figure(a.Centre.DistanceTo(b.Centre))} mm apart, and the radii are {Figure(a.Radius)} mm and {Figure(b.Radius)} mm";
         return (holds, verdict);
@@ -213,33 +273,99 @@ internal sealed class Conditions(Evaluator evaluator, Decider decider)
 
     private (bool? Holds, Verdict Verdict) Shared(SharedTest test)
     {
-        if (test.Relation == SharedRelation.ThroughOnePoint)
+        switch (test.Relation)
         {
-            LineValue[] lines = [.. test.Figures.Select(evaluator.Line)];
-            return EachWithFirstTwo(lines, (a, b, c) => Zero(Concurrency(a.Directed.Mark.Line, b.Directed.Mark.Line, c.Directed.Mark.Line)));
+            case SharedRelation.ThroughOnePoint:
+                return ThroughOnePoint([.. test.Figures.Select(evaluator.Line)]);
+            case SharedRelation.OnOneLine:
+                return OnOneLine([.. test.Figures.Select(evaluator.Point)], [.. test.Figures.Select(figure => figure.ToString()!)]);
+            case SharedRelation.OnOneCircle:
+                return OnOneCircle([.. test.Figures.Select(evaluator.Point)], [.. test.Figures.Select(figure => figure.ToString()!)]);
+            default:
+                throw new UnreachableException($"No test of {test.Relation}.");
         }
-
-        PointValue[] points = [.. test.Figures.Select(evaluator.Point)];
-        if (test.Relation == SharedRelation.OnOneLine)
-            return EachWithFirstTwo(points, (a, b, c) => Zero(Vector.Cross(b.Point.From(a.Point), c.Point.From(a.Point))));
-        Verdict weakest = Verdict.Proved;
-        for (int next = 3; next < points.Length; next++)
-        {
-            (bool? holds, Verdict verdict) = Zero(InCircle(points[0].Point, points[1].Point, points[2].Point, points[next].Point));
-            if (holds != true)
-                return (holds, verdict);
-            weakest = Weaker(weakest, verdict);
-        }
-
-        return (true, weakest);
     }
 
-    private static (bool? Holds, Verdict Verdict) EachWithFirstTwo<T>(T[] figures, Func<T, T, T, (bool? Holds, Verdict Verdict)> test)
+    private (bool? Holds, Verdict Verdict) OnOneLine(PointValue[] points, string[] names)
+    {
+        // Two that are apart settle the line.
+        int other = Array.FindIndex(points, point => !IsSame(point, points[0]));
+        if (other < 0)
+            return (true, Verdict.Proved);
+        Line line = Line.Through(points[0].Point, points[other].Point);
+        return Every(points, other + 1, (point, place) =>
+        {
+            Real side = line.SideOf(point.Point);
+            (bool? holds, Verdict verdict) = ReferenceEquals(point.Mark, points[0].Mark) ? (true, Verdict.Proved) : Zero(side);
+            if (holds == false)
+                ByHowMuch = $"`{names[place]}` lies {Figure(side / line.DirectionLength, size: true)} mm off the line from `{names[0]}` to `{names[other]}`";
+            return (holds, verdict);
+        });
+    }
+
+    private (bool? Holds, Verdict Verdict) OnOneCircle(PointValue[] points, string[] names)
+    {
+        // Three that are no two alike settle the circle, if they are not on one line.
+        List<int> apart = [];
+        for (int place = 0; place < points.Length && apart.Count < 3; place++)
+            if (apart.TrueForAll(earlier => !IsSame(points[earlier], points[place])))
+                apart.Add(place);
+        if (apart.Count < 3)
+            return (true, Verdict.Proved);
+        Point a = points[apart[0]].Point, b = points[apart[1]].Point, c = points[apart[2]].Point;
+        Real bend = Vector.Cross(b.From(a), c.From(a));
+        (bool? straight, Verdict straightness) = Zero(bend);
+        if (straight != false)
+        {
+            ByHowMuch = $"`{names[apart[0]]}`, `{names[apart[1]]}` and `{names[apart[2]]}` are on one line";
+            return (straight is null ? null : false, straightness);
+        }
+
+        return Every(points, apart[2] + 1, (point, place) =>
+        {
+            (bool? holds, Verdict verdict) = Zero(InCircle(a, b, c, point.Point));
+            if (holds == false)
+            {
+                // The circle's middle, from the halves of two chords.
+                Vector u = b.From(a), v = c.From(a);
+                Point centre = a.Plus(new((v.Y * u.SquaredLength - (u.Y * v.SquaredLength)) / (2 * bend), (u.X * v.SquaredLength - (v.X * u.SquaredLength)) / (2 * bend)));
+                ByHowMuch = $"`{names[place]}` lies {Figure(point.Point.DistanceTo(centre) - centre.DistanceTo(a), size: true)} mm off the circle through `{names[apart[0]]}`, `{names[apart[1]]}` and `{names[apart[2]]}`";
+            }
+
+            return (holds, verdict);
+        });
+    }
+
+    private (bool? Holds, Verdict Verdict) ThroughOnePoint(LineValue[] lines)
+    {
+        // Two that cross settle the point.
+        Line first = lines[0].Directed.Mark.Line;
+        int other = Array.FindIndex(lines, line => !decider.IsZero(Vector.Cross(first.Direction, line.Direction)));
+        if (other < 0)
+        {
+            ByHowMuch = "they are parallel";
+            return Every(lines, 1, (line, _) => SameLine(lines[0], line));
+        }
+
+        Line second = lines[other].Directed.Mark.Line;
+        return Every(lines, 1, (line, place) =>
+        {
+            if (place == other)
+                return (true, Verdict.Proved);
+            Line third = line.Directed.Mark.Line;
+            (bool? holds, Verdict verdict) = Zero(Concurrency(first, second, third));
+            if (holds == false)
+                ByHowMuch = $"one passes {Figure(third.SideOf(Crossing.Of(first, second, decider).Points[0]) / third.DirectionLength, size: true)} mm from where two others cross";
+            return (holds, verdict);
+        });
+    }
+
+    private static (bool? Holds, Verdict Verdict) Every<T>(T[] figures, int from, Func<T, int, (bool? Holds, Verdict Verdict)> test)
     {
         Verdict weakest = Verdict.Proved;
-        for (int next = 2; next < figures.Length; next++)
+        for (int place = from; place < figures.Length; place++)
         {
-            (bool? holds, Verdict verdict) = test(figures[0], figures[1], figures[next]);
+            (bool? holds, Verdict verdict) = test(figures[place], place);
             if (holds != true)
                 return (holds, verdict);
             weakest = Weaker(weakest, verdict);
@@ -247,6 +373,9 @@ internal sealed class Conditions(Evaluator evaluator, Decider decider)
 
         return (true, weakest);
     }
+
+    private bool IsSame(PointValue a, PointValue b) =>
+        ReferenceEquals(a.Mark, b.Mark) || (decider.IsZero(a.Point.X - b.Point.X) && decider.IsZero(a.Point.Y - b.Point.Y));
 
     // The determinant of the three lines' coefficients; zero where they share a point or are all parallel.
     private static Real Concurrency(Line a, Line b, Line c)
@@ -279,9 +408,10 @@ internal sealed class Conditions(Evaluator evaluator, Decider decider)
 
     private void Tell(Real difference, string unit) => ByHowMuch = $"the difference is {Figure(difference)}{unit}";
 
-    private static string Figure(Real value, bool size = false)
+    private static string Figure(Real value, bool size = false) => Figure(value.ToDouble(), size);
+
+    private static string Figure(double approximate, bool size = false)
     {
-        double approximate = value.ToDouble();
         return (size ? Math.Abs(approximate) : approximate).ToString("0.#########e+0", CultureInfo.InvariantCulture) is var scientific && (approximate == 0 || Math.Abs(approximate) is >= 1e-4 and < 1e7)
             ? ValueText.Decimals(size ? Math.Abs(approximate) : approximate, 6)
             : scientific;

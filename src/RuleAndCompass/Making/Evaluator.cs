@@ -179,12 +179,14 @@ internal sealed class Evaluator(Decider decider)
         foreach (Expression index in step.Indices)
         {
             if (value is UnboundValue)
-                return value;
+                break;
             if (value is not FamilyValue family)
                 throw new FaultException(MakingFindings.WrongKind(step.Name.Text, value.KindWithArticle, "a family", step.Span, "only one of a family takes an index"));
             IndexKey key = Index(index);
             if (family.Find(key) is not { } member)
             {
+                if ((family.Missing.TryGetValue(key, out UnboundValue? missing) ? missing : family.Rest) is { } unbound)
+                    return unbound;
                 if (family.Members.Count == 0)
                     throw new FaultException(null);
                 IndexKey least = family.Members.Keys.First(), greatest = family.Members.Keys.Last();

@@ -38,6 +38,7 @@ internal sealed class Keeping(Evaluator evaluator, Decider decider)
                         throw new FaultException(MakingFindings.BadKeep("a way is said along a circle only", leg.Span, "leave out `clockwise` or `anticlockwise`"));
                     MustLieOn(at, line.Directed.Mark.Line, leg.Along, name, leg);
                     MustLieOn(to, line.Directed.Mark.Line, leg.Along, leg.To.ToString()!, leg);
+                    MustGoOn(at, to, leg);
                     pieces.Add(new SegmentPiece(at.Point, to.Point));
                     break;
                 case CircleValue circle:
@@ -45,6 +46,7 @@ internal sealed class Keeping(Evaluator evaluator, Decider decider)
                         throw new FaultException(MakingFindings.BadKeep("which way round is not said", leg.Span, "add `clockwise` or `anticlockwise`"));
                     MustLieOn(at, circle.Mark.Circle, leg.Along, name, leg);
                     MustLieOn(to, circle.Mark.Circle, leg.Along, leg.To.ToString()!, leg);
+                    MustGoOn(at, to, leg);
                     pieces.Add(Arc(circle.Mark.Circle, at.Point, to.Point, way));
                     break;
                 case Value other:
@@ -70,8 +72,7 @@ internal sealed class Keeping(Evaluator evaluator, Decider decider)
             null => new StraightLie(0),
             TowardLie toward => new StraightLie(Toward(at, evaluator.Point(toward.Toward), toward)),
             AlongLie along => new StraightLie(Degrees(evaluator.Line(along.Line).Direction)),
-            RoundLie round when evaluator.Circle(round.Circle).Mark.Circle is var circle =>
-                new BentLie(circle.Centre, at.Point.DistanceTo(circle.Centre).ToDouble(), round.Way == Way.Clockwise),
+            RoundLie round => Bent(at, evaluator.Circle(round.Circle).Mark.Circle, round),
             _ => throw new UnreachableException(),
         };
         return new(text, at.Point, sentence.Anchor, height.ToDouble(), lie, sentence.Span, null);
@@ -86,11 +87,20 @@ internal sealed class Keeping(Evaluator evaluator, Decider decider)
         return lie.Feet ? degrees + 90 : degrees - 90;
     }
 
+    private BentLie Bent(PointValue at, Circle circle, RoundLie lie)
+    {
+        if (decider.IsZero(at.Point.SquaredDistanceTo(circle.Centre)))
+            throw new FaultException(MakingFindings.OnePointTwice("the lettering's place", $"the centre of {lie.Circle}", lie.Span) with { Message = $"the lettering's place is the centre of `{lie.Circle}`, so it cannot be bent round it", Hint = "letter at a point away from the centre" });
+        return new(circle.Centre, at.Point.DistanceTo(circle.Centre).ToDouble(), lie.Way == Way.Clockwise);
+    }
+
     private static double Degrees(Vector direction) => Math.Atan2(direction.Y.ToDouble(), direction.X.ToDouble()) * 180 / Math.PI;
 
     private static IEnumerable<(string Name, Value Value)> Members(Value value, string name) => value is FamilyValue family
-        ? family.Members.SelectMany(member => Members(member.Value, $"{name}[{member.Key}]"))
+        ? family.Members.SelectMany(member => Members(member.Value, Indexed(name, member.Key)))
         : [(name, value)];
+
+    private static string Indexed(string name, IndexKey key) => name.EndsWith(']') ? $"{name[..^1]}, {key}]" : $"{name}[{key}]";
 
     private Kept Keep(Value value, string name, KeepSentence sentence, Style style)
     {
@@ -130,6 +140,8 @@ internal sealed class Keeping(Evaluator evaluator, Decider decider)
         PointValue from = evaluator.Point(part.From), to = evaluator.Point(part.To);
         MustLieOn(from, circle.Mark.Circle, name, part.From, part);
         MustLieOn(to, circle.Mark.Circle, name, part.To, part);
+        if (ReferenceEquals(from.Mark, to.Mark))
+            throw new FaultException(MakingFindings.BadKeep("the part to be kept begins and ends at one point", part.Span, $"for all of it, `keep {name}`"));
         return Arc(circle.Mark.Circle, from.Point, to.Point, way);
     }
 
@@ -260,6 +272,12 @@ internal sealed class Keeping(Evaluator evaluator, Decider decider)
         CircleValue circle => circle.Mark.Circle,
         Value other => throw new FaultException(MakingFindings.WrongKind(reference.ToString()!, other.KindWithArticle, "a line or a circle", reference.Span)),
     };
+
+    private static void MustGoOn(PointValue from, PointValue to, Leg leg)
+    {
+        if (ReferenceEquals(from.Mark, to.Mark))
+            throw new FaultException(MakingFindings.BadKeep("this piece of the run begins and ends at one point", leg.Span, "leave it out, or name the point it goes to"));
+    }
 
     private void MustLieOn(PointValue point, Curve curve, Reference curveName, string pointName, Node at) => MustLieOn(point, curve, curveName.ToString()!, pointName, at);
 

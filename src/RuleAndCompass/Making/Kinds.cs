@@ -20,7 +20,7 @@ internal static class Kinds
         ("number", QuantityValue { Dimension: 0 }) or ("length", QuantityValue { Dimension: 1 }) => value,
         ("length", QuantityValue { IsNothing: true }) => new QuantityValue(Real.Zero, 1),
         ("angle", QuantityValue { IsNothing: true }) => new AngleValue(Angle.Zero),
-        ({ } plural, FamilyValue family) when plural.EndsWith('s') && family.Flattened().All(member => Fit(member, plural[..^1]) is not null) => family,
+        ({ } plural, FamilyValue family) when plural.EndsWith('s') && family.Flattened().All(member => Fit(member, plural[..^1]) is not null) => family.SecondName(),
         _ => null,
     };
 }

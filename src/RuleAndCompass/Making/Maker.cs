@@ -35,6 +35,7 @@ public sealed partial class Maker
     private readonly List<string> following = [];
     private readonly HashSet<string> givenNames = new(StringComparer.Ordinal);
     private readonly long deadline;
+    private LineMap? lines;
     private (SourceSpan Span, string Recipe)? followed;
     private bool isDial;
     private int carriedOut;
@@ -93,19 +94,18 @@ public sealed partial class Maker
     private Outcome<Layout> CarryOut()
     {
         evaluator.Scope = new(null, "");
+        UnboundValue unread = new();
+        foreach (string name in script.UnreadNames)
+            evaluator.Scope.Leave(new Bound(new Name(name, default), [], default), null, unread);
         bool finished = false;
         try
         {
             CarryOut(script.Sentences, outermost: true);
             finished = true;
         }
-        catch (TooManyActsException limit)
+        catch (FaultException fault)
         {
-            findings.Add(MakingFindings.Limit("the script asks for too many acts", $"{limit.Limit}", script.Sentences[^1].Span, "divide the work over several scripts"));
-        }
-        catch (FaultException fault) when (fault.Finding is not null)
-        {
-            findings.Add(fault.Finding);
+            Add(fault.Finding);
         }
 
         foreach (string given in options.Givens?.Keys ?? [])
@@ -142,25 +142,35 @@ public sealed partial class Maker
 
     private void CarryOut(Sentence sentence, bool outermost)
     {
-        cancellation.ThrowIfCancellationRequested();
-        if (++carriedOut > options.MaximumSentences)
-            throw new FaultException(Placed(MakingFindings.Limit("too many sentences are carried out", $"{options.MaximumSentences}", sentence.Span, "look for a loop that runs too long")));
-        if (Environment.TickCount64 > deadline)
-            throw new FaultException(Placed(MakingFindings.Limit("the time allowed has run out here", $"{options.TimeLimit!.Value.TotalSeconds:0.#} s", sentence.Span, "raise `--time-limit`")));
+        Count(sentence.Span);
         try
         {
             Dispatch(sentence, outermost);
         }
-        catch (FaultException fault) when (fault.Finding?.Code != "RC2032")
+        catch (FaultException fault) when (fault.Ends == FaultEnds.Sentence || (fault.Ends == FaultEnds.Recipe && sentence is FollowSentence))
         {
             Add(fault.Finding);
-            Leave(sentence, null);
+            Leave(sentence);
         }
         catch (UndecidedException undecided)
         {
             Add(MakingFindings.Undecided(undecided.Message, undecided.Known, sentence.Span));
-            Leave(sentence, null);
+            Leave(sentence);
         }
+        catch (TooManyActsException limit)
+        {
+            throw new FaultException(Placed(MakingFindings.Limit("the script asks for too many acts", $"{limit.Limit}", sentence.Span, "look for a loop that runs too long, or divide the work over several scripts")), FaultEnds.Making);
+        }
+    }
+
+    // Sentences and passes of loops are counted, so that no script runs for ever.
+    private void Count(SourceSpan at)
+    {
+        cancellation.ThrowIfCancellationRequested();
+        if (++carriedOut > options.MaximumSentences)
+            throw new FaultException(Placed(MakingFindings.Limit("too many sentences are carried out", $"{options.MaximumSentences}", at, "look for a loop that runs too long")), FaultEnds.Making);
+        if (Environment.TickCount64 > deadline)
+            throw new FaultException(Placed(MakingFindings.Limit("the time allowed has run out here", $"{options.TimeLimit!.Value.TotalSeconds:0.#} s", at, "raise `--time-limit`")), FaultEnds.Making);
     }
 
     private void Dispatch(Sentence sentence, bool outermost)
@@ -187,13 +197,14 @@ public sealed partial class Maker
                 Given(given, outermost);
                 break;
             case LetSentence let:
-                Bind(let.Bound, evaluator.Evaluate(let.Value));
+                Value named = evaluator.Evaluate(let.Value);
+                Bind(let.Bound, named is FamilyValue family ? family.SecondName() : named);
                 break;
             case StageSentence stage:
                 stages.Open(evaluator.Text(stage.Text), bench.Acts.Count);
                 break;
             case RefuseSentence refuse:
-                throw new FaultException(MakingFindings.Refused(evaluator.Text(refuse.Text), refuse.Span, followed?.Recipe));
+                throw new FaultException(Placed(MakingFindings.Refused(evaluator.Text(refuse.Text), refuse.Span, followed?.Recipe)), FaultEnds.Recipe);
             case ForBlock loop:
                 Nested(loop.Span, () => Loop(loop));
                 break;
@@ -252,6 +263,8 @@ public sealed partial class Maker
         string name = given.Name.Text;
         givenNames.Add(name);
         Value written = evaluator.Evaluate(given.Value);
+        if (written is not (AngleValue or QuantityValue { Dimension: 0 or 1 }))
+            throw new FaultException(MakingFindings.BadGiven($"`{name}` is {written.KindWithArticle}, and a given is a number, a length or an angle", given.Value.Span, $"write `let {name} = …`"));
         Value value = written;
         bool fromCaller = false;
         if (options.Givens?.TryGetValue(name, out string? text) == true)
@@ -261,8 +274,8 @@ public sealed partial class Maker
                 throw new FaultException(MakingFindings.BadGiven($"`{text}`, set for `{name}`, cannot be read", given.Span, read.Diagnostics.FirstOrDefault()?.Message));
             value = evaluator.Evaluate(read.Value);
             fromCaller = true;
-            if (value is QuantityValue { IsNothing: true } && written is AngleValue)
-                value = new AngleValue(Angle.Zero);
+            if (value is QuantityValue { IsNothing: true })
+                value = written is AngleValue ? new AngleValue(Angle.Zero) : new QuantityValue(Real.Zero, ((QuantityValue)written).Dimension);
             if (value.GetType() != written.GetType() || (value is QuantityValue q && q.Dimension != ((QuantityValue)written).Dimension && !q.IsNothing))
                 throw new FaultException(MakingFindings.BadGiven($"`{name}` is {written.KindWithArticle}, and `{text}` is {value.KindWithArticle}", given.Span, "give it in the same kind, with its unit"));
         }
@@ -279,12 +292,20 @@ public sealed partial class Maker
             return new(null, null);
         Value from = evaluator.Evaluate(given.From), to = evaluator.Evaluate(given.To);
         foreach ((Value bound, Expression at) in ((Value, Expression)[])[(from, given.From), (to, given.To)])
-            if (Evaluator.TraceOf(bound) is not null || (bound.GetType() != value.GetType() && bound is not QuantityValue { IsNothing: true }))
-                throw new FaultException(MakingFindings.BadGiven($"the range of `{given.Name.Text}` is in another kind", at.Span));
+        {
+            bool fits = bound is QuantityValue { IsNothing: true } || (bound, value) is (AngleValue, AngleValue)
+                || (bound is QuantityValue a && value is QuantityValue b && (a.Dimension == b.Dimension || b.IsNothing));
+            if (!fits)
+                throw new FaultException(MakingFindings.BadGiven($"`{given.Name.Text}` is {value.KindWithArticle}, and its range is {bound.KindWithArticle}", at.Span, "write the range in the same kind, with its unit"));
+        }
+
         Rational low = Evaluator.Index(from, given.From).Value, high = Evaluator.Index(to, given.To).Value;
-        Rational at0 = Evaluator.Index(value, given.Value).Value;
-        if (at0 < low || at0 > high)
-            throw new FaultException(MakingFindings.BadGiven($"`{given.Name.Text}` lies outside its range, {given.From} to {given.To}", given.Span));
+        if (low > high)
+            throw new FaultException(MakingFindings.BadGiven($"the range of `{given.Name.Text}` runs backward", given.From.Span.To(given.To.Span), "write the smaller first"));
+        Rational used = Evaluator.Index(value, given.Value).Value;
+        if (used < low || used > high)
+            throw new FaultException(MakingFindings.BadGiven(
+                $"`{given.Name.Text}` is {options.Givens?.GetValueOrDefault(given.Name.Text) ?? given.Value.ToString()}, outside its range", given.Span, $"it may be from {given.From} to {given.To}"));
         return new(low, high);
     }
 
@@ -316,6 +337,7 @@ public sealed partial class Maker
             QuantityKind kind = from.Value.IsZero ? to.Kind : from.Kind;
             for (Rational at = from.Value; at <= to.Value; at += step)
             {
+                Count(loop.Variable.Span);
                 Scope pass = outer.Pass();
                 if (outer.Find(loop.Variable.Text) is not (null or UnboundValue))
                     throw new FaultException(MakingFindings.BoundTwice(loop.Variable.Text, loop.Variable.Span));
@@ -359,18 +381,21 @@ public sealed partial class Maker
 
         if (taken < block.Branches.Length)
             CarryOut(block.Branches[taken].Body);
-        LineMap lines = new(script.Text);
+        bool inRecipe = followed is not null;
         for (int branch = 0; branch < block.Branches.Length; branch++)
             if (branch != taken)
                 foreach (Bound bound in block.Branches[branch].Body.SelectMany(Binding.Of))
-                    evaluator.Scope.Leave(bound, $"`{bound.Name.Text}` is bound only in the branch at line {lines.Find(bound.Span.Start).Line}, which was not taken");
+                    evaluator.Scope.Leave(bound, KeyOf(bound), new UnboundValue(() => $"`{bound.Name.Text}` is bound only {BranchOf(bound, inRecipe)}, which was not taken"));
     }
+
+    // A recipe's lines are not those of the script at hand.
+    private string BranchOf(Bound bound, bool inRecipe) => inRecipe ? "in a branch" : $"in the branch at line {(lines ??= new(script.Text)).Find(bound.Span.Start).Line}";
 
     private void Follow(FollowSentence follow)
     {
         string title = evaluator.Text(follow.Recipe);
         if (recipes.Find(title) is not { } recipe)
-            throw new FaultException(MakingFindings.UnknownRecipe(title, NearName.Find(title, recipes.Titles), follow.Recipe.Span));
+            throw new FaultException(recipes.IsIncomplete || script.UnreadNames.Contains(title) ? null : MakingFindings.UnknownRecipe(title, NearName.Find(title, recipes.Titles), follow.Recipe.Span));
         if (following.Contains(recipe.Title))
             throw new FaultException(MakingFindings.FollowsItself(recipe.Title, follow.Recipe.Span));
         Scope caller = evaluator.Scope;
@@ -388,7 +413,7 @@ public sealed partial class Maker
             CarryOut(recipe.Body);
             Dictionary<string, Value> gifts = new(StringComparer.Ordinal);
             foreach (GiveClause gift in recipe.Gives)
-                gifts[gift.Name.Text] = inner.Find(gift.Name.Text) ?? new UnboundValue($"recipe \"{recipe.Title}\" did not make `{gift.Name.Text}` this time");
+                gifts[gift.Name.Text] = inner.Find(gift.Name.Text) ?? new UnboundValue(() => $"recipe \"{recipe.Title}\" did not make `{gift.Name.Text}` this time");
             evaluator.Scope = caller;
             Bind(follow.Alias, new GivenByRecipe(recipe.Title, gifts));
         }
@@ -401,7 +426,7 @@ public sealed partial class Maker
         }
 
         if (findings.Skip(findingsBefore).Any(finding => finding.Severity == Severity.Error && finding.Code is not ("RC2024" or "RC2026")))
-            Leave(follow, null);
+            Leave(follow);
     }
 
     private void BindNeeds(FollowSentence follow, Recipe recipe, Scope inner)
@@ -435,7 +460,8 @@ public sealed partial class Maker
                 try
                 {
                     Value value = evaluator.Evaluate(need.Default);
-                    inner.Set(need.Name.Text, Kinds.Fit(value, need.Kind.Text) ?? value);
+                    inner.Set(need.Name.Text, Kinds.Fit(value, need.Kind.Text)
+                        ?? throw new FaultException(MakingFindings.BadNeed($"recipe \"{recipe.Title}\" gives `{need.Name.Text}` {value.KindWithArticle} of its own, and needs {Kinds.WithArticle(need.Kind.Text)}", follow.Recipe.Span, "mend the recipe's `needs`")));
                 }
                 finally
                 {
@@ -465,24 +491,73 @@ public sealed partial class Maker
     private void Bind(Bound bound, Value value)
     {
         string name = bound.Name.Text;
-        bool bindable = bound.Indices.IsEmpty
-            ? evaluator.Scope.TryBind(name, value)
-            : evaluator.Scope.TryBind(name, [.. bound.Indices.Select(evaluator.Index)], value);
-        if (!bindable)
-            throw new FaultException(MakingFindings.BoundTwice(evaluator.Labelled(new Reference([bound], bound.Span)).ToString()!, bound.Span));
+        if (bound.Indices.IsEmpty)
+        {
+            if (!evaluator.Scope.TryBind(name, value))
+                throw new FaultException(MakingFindings.BoundTwice(name, bound.Span));
+            return;
+        }
+
+        IndexKey[] keys = [.. bound.Indices.Select(evaluator.Index)];
+        OfOneKind(name, keys, bound.Span);
+        if (!evaluator.Scope.TryBind(name, keys, value))
+            throw new FaultException(Taken(name, string.Join(", ", keys), bound.Span));
     }
 
     private void BindMany(Many many, IReadOnlyList<(IndexKey Key, Value Value)> members)
     {
         foreach ((IndexKey key, Value value) in members)
+        {
+            OfOneKind(many.Name.Text, [key], many.Span);
             if (!evaluator.Scope.TryBind(many.Name.Text, [key], value))
-                throw new FaultException(MakingFindings.BoundTwice($"{many.Name.Text}[{key}]", many.Span));
+                throw new FaultException(Taken(many.Name.Text, key.ToString(), many.Span));
+        }
     }
 
-    private void Leave(Sentence sentence, string? why)
+    private void OfOneKind(string name, IEnumerable<IndexKey> keys, SourceSpan span)
     {
+        Value? family = evaluator.Scope.Find(name);
+        foreach (IndexKey key in keys)
+        {
+            if (family is not FamilyValue known)
+                return;
+            if (!known.Takes(key))
+                throw new FaultException(MakingFindings.BadIndex($"`{name}[{key}]` is counted in another way than the rest of its family", span, $"the others are like `{name}[{known.Members.Keys.Last()}]`; keep to one kind of index"));
+            family = known.Find(key);
+        }
+    }
+
+    private Diagnostic Taken(string name, string index, SourceSpan span) => evaluator.Scope.Find(name) switch
+    {
+        FamilyValue { IsSecondName: true } => MakingFindings.BoundTwice(name, span) with { Hint = $"`{name}` is another name for a family that is made elsewhere; bind to the family's own name" },
+        FamilyValue => MakingFindings.BoundTwice($"{name}[{index}]", span),
+        _ => MakingFindings.BoundTwice(name, span),
+    };
+
+    private void Leave(Sentence sentence)
+    {
+        UnboundValue failed = new();
         foreach (Bound bound in Binding.Of(sentence))
-            evaluator.Scope.Leave(bound, why);
+            evaluator.Scope.Leave(bound, KeyOf(bound), failed);
+    }
+
+    // Which one of a family a sentence would have bound; null where that cannot be worked out.
+    private IndexKey? KeyOf(Bound bound)
+    {
+        if (bound.Indices.Length != 1)
+            return null;
+        try
+        {
+            return evaluator.Index(bound.Indices[0]);
+        }
+        catch (FaultException)
+        {
+            return null;
+        }
+        catch (UndecidedException)
+        {
+            return null;
+        }
     }
 
     private void Add(Diagnostic? finding)

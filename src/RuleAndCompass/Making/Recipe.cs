@@ -77,6 +77,9 @@ internal sealed class RecipeShelf
 {
     private readonly Dictionary<string, Recipe> recipes = new(StringComparer.Ordinal);
 
+    /// <summary>True where a script to be used could not be read, so that a recipe may be missing for that reason.</summary>
+    public bool IsIncomplete { get; private set; }
+
     public IEnumerable<string> Titles => recipes.Keys.Concat(RecipeBook.Names.Select(name => name.Replace('-', ' ')));
 
     public static RecipeShelf For(Script script, MakingOptions options, List<Diagnostic> findings, CancellationToken cancellation)
@@ -113,11 +116,13 @@ internal sealed class RecipeShelf
         if (options.ReadScript?.Invoke(name) is not { } text)
         {
             findings.Add(MakingFindings.CannotUse(name, use.File.Span));
+            IsIncomplete = true;
             return;
         }
 
         Outcome<Script> read = ScriptReader.Read(name, text, cancellation: cancellation);
         findings.AddRange(read.Diagnostics.Select(finding => finding with { File = name }));
+        IsIncomplete |= read.HasErrors;
         foreach (RecipeBlock block in read.Value?.Sentences.OfType<RecipeBlock>() ?? [])
             recipes.TryAdd(Recipe.Plain(block.Title), Recipe.Of(block));
     }

@@ -38,10 +38,11 @@ internal sealed class Scope(Scope? outer, string prefix)
     public bool TryBind(string name, ReadOnlySpan<IndexKey> indices, Value value)
     {
         Scope root = Root;
-        if (Find(name) is { } seen and not FamilyValue and not UnboundValue)
+        Value? seen = Find(name);
+        if (seen is not (null or FamilyValue or UnboundValue))
             return false;
         if (root.values.GetValueOrDefault(name) is not FamilyValue family)
-            root.values[name] = family = new();
+            root.values[name] = family = new() { Rest = seen as UnboundValue };
         for (int depth = 0; depth < indices.Length - 1; depth++)
         {
             if (family.Find(indices[depth]) is not FamilyValue inner)
@@ -58,12 +59,30 @@ internal sealed class Scope(Scope? outer, string prefix)
     }
 
     /// <summary>Marks a name as failed or bound in another branch only, where nothing is bound to it.</summary>
-    public void Leave(Bound bound, string? why)
+    /// <param name="key">Which one of a family, where its only index can be worked out.</param>
+    public void Leave(Bound bound, IndexKey? key, UnboundValue why)
     {
-        if (bound.Indices.IsEmpty)
-            values.TryAdd(bound.Name.Text, new UnboundValue(why));
-        else
-            Root.values.TryAdd(bound.Name.Text, new UnboundValue(why));
+        string name = bound.Name.Text;
+        switch (Find(name))
+        {
+            case null when bound.Indices.IsEmpty:
+                values[name] = why;
+                break;
+            case null when key is { } first:
+                FamilyValue begun = new();
+                begun.Missing[first] = why;
+                Root.values[name] = begun;
+                break;
+            case null:
+                Root.values[name] = new FamilyValue { Rest = why };
+                break;
+            case FamilyValue { IsSecondName: false } family when key is { } one:
+                family.Missing.TryAdd(one, why);
+                break;
+            case FamilyValue { IsSecondName: false } family when !bound.Indices.IsEmpty:
+                family.Rest ??= why;
+                break;
+        }
     }
 
     /// <summary>Sets a loop's variable, or a recipe's need.</summary>

@@ -98,18 +98,51 @@ internal readonly record struct IndexKey(QuantityKind Kind, Rational Value) : IC
     };
 }
 
-/// <summary>A family: values by index, in order of the index.</summary>
+/// <summary>A family: values by index, in order of the index, which is of one kind throughout.</summary>
 internal sealed class FamilyValue : Value
 {
-    private readonly SortedDictionary<IndexKey, Value> members = [];
+    private readonly SortedDictionary<IndexKey, Value> members;
+    private readonly Dictionary<IndexKey, UnboundValue> missing;
+
+    public FamilyValue() => (members, missing) = ([], []);
+
+    private FamilyValue(FamilyValue other)
+    {
+        (members, missing) = (other.members, other.missing);
+        Rest = other.Rest;
+        IsSecondName = true;
+    }
 
     public IReadOnlyDictionary<IndexKey, Value> Members => members;
 
     public override string KindWithArticle => "a family";
 
-    public Value? Find(IndexKey key) => members.GetValueOrDefault(key);
+    /// <summary>True for the name a <c>let</c> or a need gave it, by which nothing is added.</summary>
+    public bool IsSecondName { get; }
 
-    public bool TryAdd(IndexKey key, Value value) => members.TryAdd(key, value);
+    /// <summary>Why members may be missing whose index is not known; null where all are known.</summary>
+    public UnboundValue? Rest { get; set; }
+
+    /// <summary>What is known of members that no sentence bound.</summary>
+    public IDictionary<IndexKey, UnboundValue> Missing => missing;
+
+    public FamilyValue SecondName() => new(this);
+
+    public Value? Find(IndexKey key) => Takes(key) ? members.GetValueOrDefault(key) : null;
+
+    /// <summary>False where that index is bound, or the family is seen by its second name.</summary>
+    public bool TryAdd(IndexKey key, Value value) => !IsSecondName && members.TryAdd(key, value);
+
+    /// <summary>Whether the index is of the kind that the others are; nothing is of every kind.</summary>
+    public bool Takes(IndexKey key)
+    {
+        if (key.Value.IsZero)
+            return true;
+        foreach (IndexKey known in members.Keys)
+            if (!known.Value.IsZero)
+                return known.Kind == key.Kind;
+        return true;
+    }
 
     /// <summary>All members, those of inner families in place.</summary>
     public IEnumerable<Value> Flattened() => members.Values.SelectMany(member => member is FamilyValue inner ? inner.Flattened() : [member]);
@@ -126,9 +159,10 @@ internal sealed class GivenByRecipe(string recipe, IReadOnlyDictionary<string, V
 }
 
 /// <summary>A name whose sentence failed, or that only another branch binds: using it raises no second error, unless there is something to tell.</summary>
-internal sealed class UnboundValue(string? why = null) : Value
+/// <param name="why">What to tell where it is used; null to tell nothing.</param>
+internal sealed class UnboundValue(Func<string>? why = null) : Value
 {
-    public string? Why { get; } = why;
+    public string? Why => why?.Invoke();
 
     public override string KindWithArticle => "nothing";
 }

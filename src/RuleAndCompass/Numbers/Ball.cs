@@ -136,7 +136,13 @@ internal readonly struct Ball
     }
 
     /// <summary>Whether every real in the ball is smaller in size than 2^<paramref name="exponent"/>.</summary>
-    public bool IsBelow(int exponent) => !IsUnknown && (BigInteger.Abs(Middle) + Radius).GetBitLength() + Exponent <= exponent;
+    public bool IsBelow(int exponent)
+    {
+        if (IsUnknown)
+            return false;
+        BigInteger size = BigInteger.Abs(Middle) + Radius;
+        return size.IsZero || size.GetBitLength() + Exponent <= exponent;
+    }
 
     /// <summary>Every real in the ball is at most 2 to this in size; int.MinValue for exactly 0.</summary>
     public int MagnitudeBound()

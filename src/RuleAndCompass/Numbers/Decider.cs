@@ -23,7 +23,9 @@ public sealed class Decider
         random = new SeededBits(options.Seed);
     }
 
-    private int MaximumDegree => options.Prove ? int.MaxValue : Math.Max(options.MaximumDegree, 64);
+    private long MaximumDegree => options.Prove ? long.MaxValue / 4 : options.MaximumDegree;
+
+    private WorkLimit NewLimit() => new(options.TimeLimit, cancellation);
 
     /// <summary>The sign of <paramref name="x"/>, with how it is known; may be undecided for quantities without exact value.</summary>
     /// <exception cref="UndecidedException">The limits were reached.</exception>
@@ -149,7 +151,8 @@ public sealed class Decider
         // A stand-in for each free node is made by rebuilding the graph above them.
         Real rebuilt = FreeNodes.Detach(x, free);
         List<Real> leaves = StraightLine.LeavesOf(rebuilt);
-        Verdict? found = leaves.Count == 0 ? null : new GenericPoint(leaves, random, cancellation).TryVanishing(rebuilt, MaximumDegree);
+        WorkLimit limit = NewLimit();
+        Verdict? found = leaves.Count == 0 ? null : new GenericPoint(leaves, random, limit).TryVanishing(rebuilt, MaximumDegree);
         if (found is null)
             return false;
 
@@ -206,14 +209,21 @@ public sealed class Decider
 
         try
         {
-            var tower = new Tower(ExactForm.MostDegree, cancellation);
-            FieldElement element = ExactEvaluation.Run(line, tower, cancellation, out _);
-            return ExactForm.Of(element, tower);
+            var joint = new JointField(line, ExactForm.MostDegree, random, NewLimit());
+            return joint.FindElement() is { } element ? ExactForm.Of(element, joint) : null;
         }
         catch (Exception failure) when (failure is NegativeRadicandException or TowerTooHighException or DivideByZeroException)
         {
             return null;
         }
+    }
+
+    /// <summary>Whether <paramref name="x"/> is zero, by the field alone, whatever its enclosures say.</summary>
+    internal bool IsExactlyZero(Real x, out Verdict verdict)
+    {
+        bool? isZero = DecideZero(x, out Verdict? known);
+        verdict = known ?? Verdict.Proved;
+        return isZero == true;
     }
 
     // The sign, or 0 for the rational 0, where the enclosure at hand tells it.
@@ -235,29 +245,38 @@ public sealed class Decider
     private bool? DecideZero(Real x, out Verdict? verdict)
     {
         verdict = null;
+        WorkLimit limit = NewLimit();
         List<Real> leaves = StraightLine.LeavesOf(x);
         if (leaves.Count > 0)
         {
-            verdict = new GenericPoint(leaves, random, cancellation).TryVanishing(x, MaximumDegree);
+            verdict = new GenericPoint(leaves, random, limit).TryVanishing(x, MaximumDegree);
             if (verdict is not null)
                 return true;
         }
 
         StraightLine? line = StraightLine.Compile(x, Specific);
         if (line is null)
-            return null;
+        {
+            verdict = CyclotomicField.TryVanishing(x, random, limit);
+            return verdict is null ? null : true;
+        }
 
         try
         {
-            var tower = new Tower(MaximumDegree, cancellation);
-            FieldElement value = ExactEvaluation.Run(line, tower, cancellation, out _);
-            verdict = Verdict.Proved;
-            return value.IsZero;
+            bool isZero = new JointField(line, MaximumDegree, random, limit).DecideZero(out int bits);
+            verdict = bits == 0 ? Verdict.Proved : new Verdict(Certainty.Certain, bits, []);
+            return isZero;
         }
         catch (TowerTooHighException tooHigh)
         {
             throw new UndecidedException(
                 $"the decision needs numbers of degree {tooHigh.Degree.ToString(CultureInfo.InvariantCulture)}",
+                new Verdict(Certainty.Digits, DigitsBelow(Enclosures.Of(x, FirstBits, cancellation)), []));
+        }
+        catch (OutOfTimeException)
+        {
+            throw new UndecidedException(
+                "the decision takes longer than the time allowed",
                 new Verdict(Certainty.Digits, DigitsBelow(Enclosures.Of(x, FirstBits, cancellation)), []));
         }
         catch (DivideByZeroException)

@@ -10,7 +10,7 @@ internal static class ExactForm
     public const int MostDegree = 8;
     private const int MostLength = 40;
 
-    public static string? Of(FieldElement element, Tower? tower)
+    public static string? Of(FieldElement element, JointField? tower)
     {
         string? sum = Sum(element, tower, out int terms);
         if (sum is null)
@@ -20,7 +20,7 @@ internal static class ExactForm
         return text.Length <= MostLength ? text : null;
     }
 
-    private static string? Sum(FieldElement element, Tower? tower, out int terms)
+    private static string? Sum(FieldElement element, JointField? tower, out int terms)
     {
         terms = 0;
         var text = new StringBuilder();
@@ -48,7 +48,7 @@ internal static class ExactForm
         return text.ToString();
     }
 
-    private static string? Root(int product, List<int> generators, Tower? tower)
+    private static string? Root(int product, List<int> generators, JointField? tower)
     {
         BigInteger flat = BigInteger.One;
         var nested = new StringBuilder();

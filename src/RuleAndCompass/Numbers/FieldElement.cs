@@ -94,6 +94,17 @@ internal sealed record FieldElement(ulong Generators, BigInteger[] Coefficients,
         return new FieldElement(generators, coefficients, denominator);
     }
 
+    /// <summary>The generators by number, lowest first.</summary>
+    public int[] Levels() => Levels(Generators);
+
+    public static int[] Levels(ulong generators)
+    {
+        var levels = new int[BitOperations.PopCount(generators)];
+        for (int i = 0; generators != 0; generators &= generators - 1)
+            levels[i++] = BitOperations.TrailingZeroCount(generators);
+        return levels;
+    }
+
     /// <summary>The coefficients with zeros for the generators of <paramref name="wider"/> that do not stand here.</summary>
     public BigInteger[] Spread(ulong wider)
     {

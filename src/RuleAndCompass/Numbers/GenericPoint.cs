@@ -24,15 +24,15 @@ internal sealed class GenericPoint
     private const int MostNearness = 640;
 
     private readonly SeededBits random;
-    private readonly CancellationToken cancellation;
+    private readonly WorkLimit limit;
     private readonly List<Real> leaves;
     private readonly List<Unknown> unknowns = [];
     private readonly Dictionary<Real, int> unknownOf = new(ReferenceEqualityComparer.Instance);
 
-    public GenericPoint(List<Real> leaves, SeededBits random, CancellationToken cancellation)
+    public GenericPoint(List<Real> leaves, SeededBits random, WorkLimit limit)
     {
         this.random = random;
-        this.cancellation = cancellation;
+        this.limit = limit;
         this.leaves = leaves;
         foreach (Real leaf in leaves)
             Place(leaf);
@@ -53,7 +53,7 @@ internal sealed class GenericPoint
     }
 
     /// <summary>The verdict where <paramref name="x"/> vanishes identically; null where it does not, or where this cannot tell.</summary>
-    public Verdict? TryVanishing(Real x, int maximumDegree)
+    public Verdict? TryVanishing(Real x, long maximumDegree)
     {
         for (int nearness = FirstNearness; nearness <= MostNearness; nearness *= 2)
         {
@@ -63,6 +63,7 @@ internal sealed class GenericPoint
                 return null;
 
             StraightLine line = StraightLine.Compile(x, leaf => standIns[leaf])!;
+            limit.Check();
             Bounds bounds = Bounds.Of(line, IndexOf(line, standIns), unknowns.Count);
             if (bounds.LogDegree > RandomBits - LeastCertainty)
                 return null;
@@ -77,12 +78,12 @@ internal sealed class GenericPoint
                 line = StraightLine.Compile(x, leaf => standIns[leaf])!;
             }
 
-            FieldElement[] elements;
-            FieldElement value;
+            var joint = new JointField(line, maximumDegree, random, limit);
+            bool isZero;
+            int certainty;
             try
             {
-                var tower = new Tower(maximumDegree, cancellation);
-                value = ExactEvaluation.Run(line, tower, cancellation, out elements);
+                isZero = joint.DecideZero(out certainty);
             }
             catch (Exception failure) when (failure is NegativeRadicandException or TowerTooHighException or DivideByZeroException)
             {
@@ -91,13 +92,19 @@ internal sealed class GenericPoint
                 continue;
             }
 
-            if (!value.IsZero)
+            if (!isZero)
                 return null;
-            if (!BranchHolds(line, elements, standIns, nearness))
+            if (!BranchHolds(line, joint, standIns, nearness))
                 continue;
 
             ImmutableArray<string> names = [.. unknowns.Where(unknown => unknown.Words is not null).Select(unknown => unknown.Words!)];
             int size = RandomBits - bounds.LogDegree;
+            if (certainty > 0)
+            {
+                proves = false;
+                size = Math.Min(size, certainty) - 1;
+            }
+
             return (proves, names.IsEmpty) switch
             {
                 (true, true) => Verdict.Proved,
@@ -233,7 +240,7 @@ internal sealed class GenericPoint
     }
 
     // No radicand and no divisor vanishes while the unknowns move from their values to the random ones.
-    private bool BranchHolds(StraightLine line, FieldElement[] elements, Dictionary<Real, Real> standIns, int nearness)
+    private bool BranchHolds(StraightLine line, JointField joint, Dictionary<Real, Real> standIns, int nearness)
     {
         int bits = nearness + 128;
         var hulls = new Dictionary<int, Ball>();
@@ -252,7 +259,7 @@ internal sealed class GenericPoint
             }
         }
 
-        Ball[] balls = ExactEvaluation.Balls(line, hulls, bits);
+        Ball[] balls = ProgramBalls.Evaluate(line, hulls, bits);
         for (int i = 0; i < line.Count; i++)
         {
             StraightLine.Instruction step = line[i];
@@ -260,7 +267,7 @@ internal sealed class GenericPoint
                 continue;
             if (step.Operation == Operation.Divide && balls[step.Right].ContainsZero)
                 return false;
-            if (step.Operation == Operation.Sqrt && balls[step.Left].Sign <= 0 && !elements[step.Left].IsZero)
+            if (step.Operation == Operation.Sqrt && balls[step.Left].Sign <= 0 && !joint.IsKnownZero(step.Left))
                 return false;
         }
 

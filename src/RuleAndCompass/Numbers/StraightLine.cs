@@ -9,6 +9,7 @@ internal sealed class StraightLine
     private readonly Dictionary<Rational, int> constantIndex = [];
     private readonly Dictionary<(Operation Operation, int Left, int Right), int> operationIndex = [];
     private readonly List<Instruction> instructions = [];
+    private readonly Dictionary<int, Real> leaves = [];
 
     private StraightLine()
     {
@@ -19,13 +20,16 @@ internal sealed class StraightLine
 
     public IReadOnlyList<Instruction> Instructions => instructions;
 
+    /// <summary>The leaves that <c>replace</c> kept as they are; their constants count for nothing.</summary>
+    public IReadOnlyDictionary<int, Real> Leaves => leaves;
+
     public int Count => instructions.Count;
 
     public Instruction this[int index] => instructions[index];
 
     /// <summary>Null where <paramref name="replace"/> gives null for a leaf that stands in the graph.</summary>
     /// <param name="x">The number.</param>
-    /// <param name="replace">The stand-in of a leaf: a quantity or the angle of a vector.</param>
+    /// <param name="replace">The stand-in of a leaf, a quantity or the angle of a vector; itself where it is to stay.</param>
     public static StraightLine? Compile(Real x, Func<Real, Real?> replace)
     {
         var line = new StraightLine();
@@ -55,6 +59,12 @@ internal sealed class StraightLine
                     if (standIn is null)
                         return null;
                     standIns.Add(node, standIn);
+                }
+
+                if (ReferenceEquals(standIn, node))
+                {
+                    index[node] = line.Leaf(node);
+                    continue;
                 }
 
                 if (!index.TryGetValue(standIn, out int at))
@@ -131,6 +141,13 @@ internal sealed class StraightLine
         }
 
         return at;
+    }
+
+    private int Leaf(Real node)
+    {
+        leaves[instructions.Count] = node;
+        instructions.Add(new Instruction(true, default, default, 0, 0));
+        return instructions.Count - 1;
     }
 
     private int Operate(Operation operation, int left, int right)

@@ -11,20 +11,23 @@ namespace RuleAndCompass.Numbers;
 /// down and one of (x ± n)/2 is. S. Landau, Simplification of nested radicals, SIAM J. Comput. 21 (1992); A. Borodin, R. Fagin,
 /// J. Hopcroft and M. Tompa, Decreasing the nesting depth of expressions involving square roots, J. Symb. Comput. 1 (1985).
 /// </remarks>
-internal sealed class Tower(int maximumDegree, CancellationToken cancellation)
+internal sealed class Tower(WorkLimit limit)
 {
     private const int MostGenerators = 60;
 
-    private readonly List<Generator> generators = [];
+    // Integral radicands of the positive roots; null for one whose exact value was not needed so far.
+    private readonly List<FieldElement?> generators = [];
     private Ball[] balls = [];
     private int ballBits;
 
-    /// <summary>The positive root of an integral radicand from below.</summary>
-    private sealed record Generator(FieldElement Radicand);
+    public int Count => generators.Count;
 
     public long Degree => 1L << generators.Count;
 
-    public FieldElement RadicandOf(int generator) => generators[generator].Radicand;
+    public FieldElement RadicandOf(int generator) =>
+        generators[generator] ?? throw new System.Diagnostics.UnreachableException("The radicand of this generator is not known yet.");
+
+    public bool IsFlat(int generator) => generators[generator] is { IsRational: true };
 
     public static FieldElement Add(FieldElement a, FieldElement b) => Sum(a, b, subtract: false);
 
@@ -36,7 +39,7 @@ internal sealed class Tower(int maximumDegree, CancellationToken cancellation)
             return FieldElement.Zero;
 
         ulong all = Closed(a.Generators | b.Generators, a.Generators & b.Generators);
-        int[] levels = Levels(all);
+        int[] levels = FieldElement.Levels(all);
         var product = new BigInteger[1 << levels.Length];
         MultiplyInto(product, a.Spread(all), b.Spread(all), levels.Length, all, levels);
         return FieldElement.Normal(all, product, a.Denominator * b.Denominator);
@@ -45,12 +48,12 @@ internal sealed class Tower(int maximumDegree, CancellationToken cancellation)
     /// <exception cref="DivideByZeroException">It is zero.</exception>
     public FieldElement Invert(FieldElement a)
     {
-        cancellation.ThrowIfCancellationRequested();
+        limit.Check();
         if (a.IsRational)
             return FieldElement.Of(Rational.One / a.ToRational());
 
         (FieldElement low, FieldElement high, int top) = Split(a);
-        FieldElement radicand = generators[top].Radicand;
+        FieldElement radicand = RadicandOf(top);
         FieldElement norm = Subtract(Multiply(low, low), Multiply(Multiply(high, high), radicand));
         FieldElement inverse = Invert(norm);
         return Multiply(Join(low, high.Negated(), top), inverse);
@@ -62,13 +65,101 @@ internal sealed class Tower(int maximumDegree, CancellationToken cancellation)
         if (radicand.IsZero)
             return radicand;
 
-        // √(R/d) = √(R d)/d with the square factors of R d taken out.
-        var integral = new FieldElement(radicand.Generators, radicand.Coefficients, BigInteger.One);
-        BigInteger content = Content(integral.Coefficients);
-        BigInteger outside = SquareFactors(content * radicand.Denominator, out BigInteger rest);
-        FieldElement primitive = Divided(integral, content).Times(rest);
-        FieldElement root = IntegralSqrt(primitive);
+        (FieldElement integral, BigInteger outside) = Integral(radicand);
+        return IntegralSqrt(integral).Times(outside).Over(radicand.Denominator);
+    }
+
+    /// <summary>As <see cref="Sqrt"/>, for a rational that is a square here exactly when it is one among the flat generators' products.</summary>
+    public FieldElement FlatSqrt(FieldElement radicand)
+    {
+        if (radicand.IsZero)
+            return radicand;
+        if (radicand.Coefficients[0].Sign < 0)
+            throw new NegativeRadicandException();
+
+        (FieldElement integral, BigInteger outside) = Integral(radicand);
+        FieldElement root = FindFlatRoot(integral.Coefficients[0]) ?? Single(Adjoin(integral));
         return root.Times(outside).Over(radicand.Denominator);
+    }
+
+    /// <summary>A new generator that is known to be independent; its radicand is not computed.</summary>
+    public int AdjoinFresh() => Adjoin(null);
+
+    /// <summary>Tells the radicand of a fresh generator; gives the root of it. The generator stands for that root times the denominator.</summary>
+    public FieldElement MakeExact(int generator, FieldElement radicand)
+    {
+        (FieldElement integral, BigInteger outside) = Integral(radicand);
+        generators[generator] = integral;
+        ballBits = 0;
+        return Single(generator).Times(outside).Over(radicand.Denominator);
+    }
+
+    /// <summary>A bound of the binary logarithm of every conjugate of the element times its denominator.</summary>
+    public double LogHouse(FieldElement element)
+    {
+        double[] logs = [.. element.Levels().Select(level => generators[level] is { } radicand ? LogHouse(radicand) / 2 : double.PositiveInfinity)];
+        double house = double.NegativeInfinity;
+        for (int i = 0; i < element.Coefficients.Length; i++)
+        {
+            if (element.Coefficients[i].IsZero)
+                continue;
+            double term = House.Log(element.Coefficients[i]);
+            for (int j = 0; j < logs.Length; j++)
+            {
+                if ((i >> j & 1) != 0)
+                    term += logs[j];
+            }
+
+            house = double.IsNegativeInfinity(house) ? term : Math.Max(house, term) + Math.Log2(1 + Math.Pow(2, -Math.Abs(house - term)));
+        }
+
+        return house;
+    }
+
+    // √(R/d) = outside √integral / d, with square factors of R d outside.
+    private static (FieldElement Integral, BigInteger Outside) Integral(FieldElement radicand)
+    {
+        var numerator = new FieldElement(radicand.Generators, radicand.Coefficients, BigInteger.One);
+        BigInteger content = Content(numerator.Coefficients);
+        BigInteger outside = SquareFactors(content * radicand.Denominator, out BigInteger rest);
+        return (Divided(numerator, content).Times(rest), outside);
+    }
+
+    private int Adjoin(FieldElement? radicand)
+    {
+        if (generators.Count == MostGenerators)
+            throw new TowerTooHighException(2 * Degree);
+        generators.Add(radicand);
+        return generators.Count - 1;
+    }
+
+    private FieldElement? FindFlatRoot(BigInteger radicand)
+    {
+        if (IntegerRoot.TryExact(radicand, out BigInteger plain))
+            return FieldElement.Of(plain);
+
+        int[] flat = [.. Enumerable.Range(0, generators.Count).Where(IsFlat)];
+        BigInteger[] radicands = [.. flat.Select(generator => RadicandOf(generator).Coefficients[0])];
+        long set = FlatLayer.FindSquare(radicands, radicand);
+        if (set < 0)
+            return null;
+
+        // √r = √(r Πd) / Πd × Π√d.
+        BigInteger product = BigInteger.One;
+        ulong generatorSet = 0;
+        for (int i = 0; i < flat.Length; i++)
+        {
+            if ((set >> i & 1) == 0)
+                continue;
+            product *= radicands[i];
+            generatorSet |= 1UL << flat[i];
+        }
+
+        if (!IntegerRoot.TryExact(radicand * product, out BigInteger root))
+            throw new System.Diagnostics.UnreachableException("The product of these radicands is a square.");
+        var coefficients = new BigInteger[1 << BitOperations.PopCount(generatorSet)];
+        coefficients[^1] = root;
+        return FieldElement.Normal(generatorSet, coefficients, product);
     }
 
     /// <summary>The sign of an element by balls as fine as it takes.</summary>
@@ -79,7 +170,7 @@ internal sealed class Tower(int maximumDegree, CancellationToken cancellation)
 
         for (int bits = 64; ; bits *= 2)
         {
-            cancellation.ThrowIfCancellationRequested();
+            limit.Check();
             int sign = BallOf(a, bits).Sign;
             if (sign != 0)
                 return sign;
@@ -94,7 +185,7 @@ internal sealed class Tower(int maximumDegree, CancellationToken cancellation)
 
     private Ball Evaluate(FieldElement a, int bits)
     {
-        int[] levels = Levels(a.Generators);
+        int[] levels = a.Levels();
         Ball sum = Horner(a.Coefficients, levels.Length, levels, bits);
         return a.Denominator.IsOne ? sum : Ball.Divide(sum, Ball.Of(a.Denominator, bits), bits);
     }
@@ -120,14 +211,14 @@ internal sealed class Tower(int maximumDegree, CancellationToken cancellation)
         Array.Resize(ref balls, generators.Count);
         ballBits = bits;
         for (int i = from; i < balls.Length; i++)
-            balls[i] = Ball.Sqrt(Evaluate(generators[i].Radicand, bits), bits);
+            balls[i] = generators[i] is { } radicand ? Ball.Sqrt(Evaluate(radicand, bits), bits) : Ball.Unknown;
     }
 
     private FieldElement IntegralSqrt(FieldElement radicand)
     {
         for (int i = 0; i < generators.Count; i++)
         {
-            if (generators[i].Radicand.SameAs(radicand))
+            if (generators[i] is { } known && known.SameAs(radicand))
                 return Single(i);
         }
 
@@ -137,17 +228,13 @@ internal sealed class Tower(int maximumDegree, CancellationToken cancellation)
 
         if (Sign(radicand) < 0)
             throw new NegativeRadicandException();
-        if (2 * Degree > maximumDegree || generators.Count == MostGenerators)
-            throw new TowerTooHighException(2 * Degree);
-
-        generators.Add(new Generator(radicand));
-        return Single(generators.Count - 1);
+        return Single(Adjoin(radicand));
     }
 
     // A root among the first `storeys` generators' elements, of either sign; null where there is none.
     private FieldElement? FindRoot(FieldElement radicand, int storeys)
     {
-        cancellation.ThrowIfCancellationRequested();
+        limit.Check();
         if (radicand.IsZero)
             return radicand;
 
@@ -162,7 +249,7 @@ internal sealed class Tower(int maximumDegree, CancellationToken cancellation)
             return null;
 
         int top = storeys - 1;
-        FieldElement below = generators[top].Radicand;
+        FieldElement below = RadicandOf(top);
         if ((radicand.Generators >> top & 1) == 0)
         {
             // x is a square here exactly when x or x d is one below: √x, or √(x d)/d times the generator.
@@ -244,7 +331,7 @@ internal sealed class Tower(int maximumDegree, CancellationToken cancellation)
         {
             if ((shared >> i & 1) == 0)
                 continue;
-            ulong inner = generators[i].Radicand.Generators;
+            ulong inner = RadicandOf(i).Generators;
             shared |= inner;
             all |= inner;
         }
@@ -252,13 +339,6 @@ internal sealed class Tower(int maximumDegree, CancellationToken cancellation)
         return all;
     }
 
-    private static int[] Levels(ulong all)
-    {
-        var levels = new int[BitOperations.PopCount(all)];
-        for (int i = 0; all != 0; all &= all - 1)
-            levels[i++] = BitOperations.TrailingZeroCount(all);
-        return levels;
-    }
 
     private void MultiplyInto(Span<BigInteger> product, ReadOnlySpan<BigInteger> a, ReadOnlySpan<BigInteger> b, int level, ulong all, int[] levels)
     {
@@ -305,7 +385,7 @@ internal sealed class Tower(int maximumDegree, CancellationToken cancellation)
         for (int i = 0; i < half; i++)
             high[i] -= low[i] + top[i];
 
-        FieldElement radicand = generators[levels[level - 1]].Radicand;
+        FieldElement radicand = RadicandOf(levels[level - 1]);
         if (radicand.IsRational)
         {
             for (int i = 0; i < half; i++)

@@ -46,7 +46,9 @@ internal static class Workloads
         "w3" => Feuerbach(),
         "w4M" => Chain(ChainM, 1, size),
         "w4N" => Chain(ChainN, 3, size),
-        "w5" => Polygon(257, 2),
+        "w5" => PolygonByKnownCrossings(257),
+        "w5mirror" => Polygon(257, 2),
+        "w2known" => PolygonByKnownCrossings(17),
         "w5rot" => Polygon(257, 0),
         "w6" => Order(),
         _ => throw new ArgumentException($"No workload {name}.", nameof(name)),
@@ -200,6 +202,26 @@ internal static class Workloads
             previous = current;
             current = next;
         }
+
+        tally.Count(decider.Decide(current.X - first.X));
+        tally.Count(decider.Decide(current.Y - first.Y));
+        return tally;
+    }
+
+    // Circle by circle round the rim: each new circle has its centre on the rim and passes through the last point, so both are known to lie on both
+    // curves. The other crossing is the known one mirrored in the line of centres, and every length in that is a radius.
+    private static Tally PolygonByKnownCrossings(int sides)
+    {
+        var tally = new Tally();
+        Decider decider = NewDecider();
+        var periods = new GaussPeriods(sides);
+        Real c = periods.Get((sides - 1) / 2, 0) / 2;
+        Real s = Real.Sqrt(1 - c * c);
+        Vec first = new(1, 0), previous = first, current = new(c, s);
+        Real chord = (current - first).Norm();
+        Real along = (1 - chord + 1) / (2 * (Real)1);
+        for (int k = 1; k < sides; k++)
+            (previous, current) = (current, 2 * along * current - previous);
 
         tally.Count(decider.Decide(current.X - first.X));
         tally.Count(decider.Decide(current.Y - first.Y));

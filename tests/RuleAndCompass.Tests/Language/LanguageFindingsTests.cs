@@ -13,6 +13,18 @@ public sealed class LanguageFindingsTests
 
     public static TheoryData<string> Pairs => [.. LanguageFiles.Names("*.setout", "Expected")];
 
+    public static TheoryData<string, string> Slips => LanguageFiles.Table("Slips.txt");
+
+    [Theory]
+    [MemberData(nameof(Slips))]
+    public void A_slip_gets_a_hint_that_mends_it(string source, string hint) =>
+        ScriptReader.Read("slip", source).Diagnostics.ShouldHaveSingleItem().Hint.ShouldBe(hint);
+
+    [Fact]
+    public void A_block_begun_with_a_word_of_habit_still_takes_its_end() =>
+        ScriptReader.Read("if", "if x = 3\n  keep a\nelse\n  keep b\nend").Diagnostics.Select(finding => finding.Hint).ShouldBe(
+            ["did you mean `when`? For example `when remainder(h, 5) = 0`", "did you mean `otherwise`? For example `otherwise`"]);
+
     [Theory]
     [MemberData(nameof(Pairs))]
     public void A_fault_is_reported_as_expected(string file)

@@ -219,6 +219,10 @@ public sealed class ScriptReaderTests
     [InlineData("when a = b\n")]
     [InlineData("recipe \"x\"\n")]
     [InlineData("end ")]
+    [InlineData("\"\" ")]
+    [InlineData("title \"{a}\" ")]
+    [InlineData("1 ")]
+    [InlineData("° ")]
     public void A_script_of_the_greatest_size_takes_no_longer_than_its_size(string piece)
     {
         string text = piece.Length == 0 ? "" : string.Concat(Enumerable.Repeat(piece, (4 << 20) / piece.Length));

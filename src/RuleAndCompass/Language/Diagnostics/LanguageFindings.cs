@@ -11,21 +11,22 @@ internal static class LanguageFindings
 
     internal static Diagnostic UnknownSentenceWord(string found, IEnumerable<string> words, SourceSpan span)
     {
-        string? near = NearName.Find(found, SentenceForms.Words);
+        string? near = Habits.FindFirstWord(found) ?? NearName.Find(found, SentenceForms.Words);
         return Error(
             "RC1001",
             $"no sentence begins with {Quote(found)}",
             span,
-            near is null
+            Vocabulary.LittleWords.Contains(found) ? "a line that begins with a little word goes on with the sentence before it, and there is none"
+            : near is null
                 ? "a sentence begins with a word such as `prick`, `rule`, `strike`, `keep`, `let` or `for`"
                 : $"did you mean `{near}`? For example `{SentenceForms.FindNearest(near, words)}`");
     }
 
-    internal static Diagnostic Unexpected(string found, IReadOnlyList<string> expected, string? near, string? example, SourceSpan span) => Error(
+    internal static Diagnostic Unexpected(string found, IReadOnlyList<string> expected, string? hint, string? example, SourceSpan span) => Error(
         "RC1002",
         expected.Count is 0 or > 5 ? $"{Quote(found)} is not understood here" : $"{Quote(found)} stands where {Join(expected)} is expected",
         span,
-        near is not null ? $"did you mean `{near}`?"
+        hint is not null ? hint
         : expected is [Rules.AName] && example is not null ? $"put a name before {Quote(found)}, {Example(example)}"
         : expected.Count > 5 ? $"here may stand {Join(expected)}" : Example(example));
 
@@ -41,11 +42,11 @@ internal static class LanguageFindings
         return Error("RC1004", $"`{word}` is a word of the language and can't be a name", span, $"call it `{capital}` or `{word}_1`, say");
     }
 
-    internal static Diagnostic TooManyWords(string found, string? near, IReadOnlyList<string> possible, SourceSpan span) => Error(
+    internal static Diagnostic TooManyWords(string found, string? hint, IReadOnlyList<string> possible, SourceSpan span) => Error(
         "RC1005",
         $"the sentence is complete before {Quote(found)}",
         span,
-        near is not null ? $"did you mean `{near}`?"
+        hint is not null ? hint
         : possible.Count > 0 ? $"leave it out, or begin a line with the next sentence; only {Join(possible)} could follow"
         : "leave it out, or begin a line with the next sentence");
 

@@ -106,14 +106,14 @@ internal sealed class Lexer
     private void ReadText()
     {
         int start = _at;
-        int lineEnd = LineEnd();
-        int close = _text.IndexOf('"', start + 1, lineEnd - start - 1);
-        if (close < 0)
+        int found = _text.AsSpan(start + 1, _end - start - 1).IndexOfAny('"', '\n', '\r');
+        int close = found < 0 ? _end : start + 1 + found;
+        if (close == _end || _text[close] != '"')
         {
-            int last = lineEnd;
+            int last = close;
             while (IsBlank(_text[last - 1]))
                 last--;
-            _at = lineEnd;
+            _at = close;
             Fault(LanguageFindings.TextNotClosed(new SourceSpan(start, last - start)));
             return;
         }

@@ -36,20 +36,51 @@ internal static class SentenceFault
             if (expected.Contains(Rules.AName) && Vocabulary.LittleWords.Contains(found.Text) && ReadsOnAsName(stream, at, sentenceWord))
                 return LanguageFindings.LittleWordAsName(found.Text, found.Span);
             string? near = Near(found.Text, expected);
-            if (near is null && before.Kind == TokenKind.Number && !Vocabulary.LittleWords.Contains(found.Text)
-                && (!Vocabulary.Holds(found.Text) || Vocabulary.UnitHabits.ContainsKey(found.Text)))
+            if (near is null && before.Kind == TokenKind.Number && IsMeantAsUnit(stream, before, found.Text))
                 return LanguageFindings.UnknownUnit(found.Text, found.Span);
-            if (near is null && Vocabulary.Units.Contains(found.Text) && (before.Kind == TokenKind.Word || before.IsSign(")") || before.IsSign("]")))
+            bool valueMayEnd = mayEnd || expected.Contains("`)`") || expected.Contains("`]`");
+            if (near is null && valueMayEnd && Vocabulary.Units.Contains(found.Text) && (before.Kind == TokenKind.Word || before.IsSign(")") || before.IsSign("]")))
                 return LanguageFindings.UnitAfterValue(found.Text, found.Span);
+            string? hint = near is null ? FindHint(stream, at, expected) : $"did you mean `{near}`?";
             return mayEnd
-                ? LanguageFindings.TooManyWords(found.Text, near, expected, found.Span)
-                : LanguageFindings.Unexpected(found.Text, expected, near, example, found.Span);
+                ? LanguageFindings.TooManyWords(found.Text, hint, expected, found.Span)
+                : LanguageFindings.Unexpected(found.Text, expected, hint, example, found.Span);
         }
 
         string written = Written(stream, found);
         return mayEnd
-            ? LanguageFindings.TooManyWords(written, null, expected, found.Span)
-            : LanguageFindings.Unexpected(written, expected, null, example, found.Span);
+            ? LanguageFindings.TooManyWords(written, FindHint(stream, at, expected), expected, found.Span)
+            : LanguageFindings.Unexpected(written, expected, FindHint(stream, at, expected), example, found.Span);
+    }
+
+    // A word after a number: near to a unit, or where a length or an angle was looked for.
+    private static bool IsMeantAsUnit(TokenStream stream, Token number, string word) =>
+        !Vocabulary.LittleWords.Contains(word)
+        && (!Vocabulary.Holds(word) || Vocabulary.UnitHabits.ContainsKey(word))
+        && (word == "h" || LanguageFindings.FindUnit(word) is not null || stream.Doubts.Any(doubt => doubt.Span == number.Span));
+
+    // What to say of a few slips that the list of what is expected does not make plain.
+    private static string? FindHint(TokenStream stream, int at, ImmutableArray<string> expected)
+    {
+        Token found = stream[at];
+        Token before = stream[Math.Max(at - 1, 0)];
+        if (found.IsSign("=") && before.IsSign("="))
+            return "one `=` is enough";
+        if (found.IsSign(",") && before.Kind == TokenKind.Number && stream[at + 1].Kind == TokenKind.Number && stream[at + 1].Span.Start == found.Span.End)
+            return $"decimals are written with a point: `{before.Text}.{stream[at + 1].Text}`";
+        if (found.Kind == TokenKind.Word && found.Text is "is" or "are" or "the" or "a" or "then")
+            return "leave it out";
+        if (expected is [Rules.AText] && found.Kind is TokenKind.Word or TokenKind.Number)
+            return $"put it between `\"` marks: `\"{found.Text}\"`";
+        if (before.Kind == TokenKind.Word && found.Kind is TokenKind.Word or TokenKind.Number or TokenKind.Angle)
+        {
+            if (before.Text is "radius" or "x" or "y" && found.Kind == TokenKind.Word)
+                return $"write `{before.Text} of {found.Text}`";
+            if (Vocabulary.FunctionArguments.ContainsKey(before.Text))
+                return $"a function takes its value in brackets: `{before.Text}({found.Text})`";
+        }
+
+        return null;
     }
 
     private static IEnumerable<string> Words(TokenStream stream)
@@ -66,7 +97,7 @@ internal static class SentenceFault
     private static bool Looks(ImmutableArray<string> expected, Token found) => expected.Contains($"`{found.Text}`");
 
     private static string? Near(string word, ImmutableArray<string> expected) =>
-        NearName.Find(word, expected.Where(what => what[0] == '`' && char.IsLetter(what[1])).Select(what => what[1..^1]));
+        Habits.FindInnerWord(word) is { } meant && expected.Contains($"`{meant}`") ? meant : NearName.Find(word, expected.Where(what => what[0] == '`' && char.IsLetter(what[1])).Select(what => what[1..^1]));
 
     // The innermost bracket that is open before a place.
     private static Token? OpenBracket(TokenStream stream, int at)

@@ -86,7 +86,7 @@ internal sealed class SentenceReader(string text, List<Token> tokens, ReadingLim
         }
 
         int next = FindNext(start + 1, end);
-        string meant = first.Kind == TokenKind.Word ? NearName.Find(first.Text, SentenceForms.Words) ?? "" : "none";
+        string meant = first.Kind == TokenKind.Word ? Habits.FindFirstWord(first.Text) ?? NearName.Find(first.Text, SentenceForms.Words) ?? "" : "none";
         blocks.AddBad(meant, first, UnreadName.Find(tokens, start, next, meant));
         return next;
     }

@@ -70,7 +70,7 @@ internal sealed partial class Constructions
         double reach = Reach(through.Point, Math.Cos(degrees), Math.Sin(degrees));
         Rational distance = Rational.FromDouble(Math.Max(1, Math.Floor(reach)));
         Point aim = through.Point.Plus((distance / Real.Sqrt(wanted.DirectionSquared)) * way);
-        PointMark aimed = bench.Locate(aim, null, AimedWords(through, aim));
+        PointMark aimed = bench.Locate(aim, null, AimedWords(through, aim), through);
         return bench.Lay(through, aimed, name, wanted);
     }
 

@@ -149,6 +149,6 @@ internal sealed partial class Constructions
         double turn = side * 40 * Math.PI / 180;
         double x = Math.Round(reach * ((dx * Math.Cos(turn)) - (dy * Math.Sin(turn))) / length), y = Math.Round(reach * ((dx * Math.Sin(turn)) + (dy * Math.Cos(turn))) / length);
         Point aim = from.Point.Plus(new(Rational.FromDouble(x), Rational.FromDouble(y)));
-        return bench.Lay(from, bench.Locate(aim, null, AimedWords(from, aim)), null);
+        return bench.Lay(from, bench.Locate(aim, null, AimedWords(from, aim), from), null);
     }
 }

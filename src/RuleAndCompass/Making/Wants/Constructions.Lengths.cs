@@ -33,7 +33,7 @@ internal sealed partial class Constructions
         string says = how.Length == 0 ? $"Prick {{}} at {start}."
             : Kit.ScaleStep is null ? "Prick {} through from the full-size plate."
             : $"Measure {how} from {start} and prick {{}}.";
-        return bench.Locate(at, name, says);
+        return bench.Locate(at, name, says, from);
     }
 
     private ScaleOpening ByScale(Real length) => new(length, Kit.ScaleStep is { } step ? Rounded(length, step) : null);

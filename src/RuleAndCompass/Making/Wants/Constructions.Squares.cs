@@ -179,16 +179,50 @@ internal sealed partial class Constructions
     private DirectedLine ParallelByRhombus(DirectedLine along, PointMark through, string? name)
     {
         Line line = along.Mark.Line;
-        double offset = Math.Abs((line.SideOf(through.Point) / line.DirectionLength).ToDouble());
-        FreeOpening opening = Free(Math.Max(offset * 1.4, Diagonal / 8), offset + 1);
+        (FreeOpening opening, int across, int onward) = BestRhombus(line, through.Point);
         CircleMark first = bench.Swing(through, opening, null);
-        PointMark here = CrossWhere(along.Mark, first, point => Decider.Sign(line.Along(point, through.Point)) < 0);
+        PointMark here = CrossWhere(along.Mark, first, point => Decider.Sign(line.Along(point, through.Point)) == across);
         CircleMark second = bench.Swing(here, opening, null, through);
-        PointMark there = CrossWhere(along.Mark, second, point => Decider.Sign(line.Along(point, here.Point)) > 0);
+        PointMark there = CrossWhere(along.Mark, second, point => Decider.Sign(line.Along(point, here.Point)) == onward);
         CircleMark third = bench.Swing(there, opening, null, here);
         Point wantedCorner = through.Point.Plus(there.Point.From(here.Point));
         PointMark corner = CrossProved(first, third, wantedCorner, null, "the parallel", line, through.Point);
-        DirectedLine parallel = LayProved(through, corner, line.ParallelThrough(through.Point), name, "the parallel", line, through.Point);
+        Line wanted = line.ParallelThrough(through.Point);
+        DirectedLine parallel = onward > 0
+            ? LayProved(through, corner, wanted, name, "the parallel", line, through.Point)
+            : LayProved(corner, through, wanted, name, "the parallel", line, through.Point);
         return along.IsReversed ? parallel.Reversed() : parallel;
     }
+
+    // The opening and the two ways along the line that keep the corners on the stock and cross most squarely.
+    private (FreeOpening Opening, int Across, int Onward) BestRhombus(Line line, Point from)
+    {
+        double length = line.DirectionLength.ToDouble();
+        double dx = line.Direction.X.ToDouble() / length, dy = line.Direction.Y.ToDouble() / length;
+        double offset = line.SideOf(from).ToDouble() / length;
+        double footX = from.XMillimetres + (offset * dy), footY = from.YMillimetres - (offset * dx);
+        (FreeOpening Opening, int Across, int Onward) best = default;
+        double least = double.MaxValue;
+        foreach (double factor in (ReadOnlySpan<double>)[1.15, 1.25, 1.4, 1.7, 2.2])
+        {
+            FreeOpening opening = Free(Math.Max(Math.Abs(offset) * factor, Diagonal / 8), Math.Abs(offset) + 1);
+            double radius = opening.Chosen.ToDouble(), reach = Math.Sqrt(Math.Max(0, (radius * radius) - (offset * offset)));
+            double slant = Math.Min(reach, Math.Abs(offset)) / radius;
+            foreach ((int across, int onward) in (ReadOnlySpan<(int, int)>)[(-1, 1), (1, -1), (1, 1), (-1, -1)])
+            {
+                double cost = Outside(footX + (across * reach * dx), footY + (across * reach * dy))
+                    + Outside(footX + (((across * reach) + (onward * radius)) * dx), footY + (((across * reach) + (onward * radius)) * dy))
+                    + Outside(from.XMillimetres + (onward * radius * dx), from.YMillimetres + (onward * radius * dy))
+                    - slant;
+                if (cost < least)
+                    (least, best) = (cost, (opening, across, onward));
+            }
+        }
+
+        return best;
+    }
+
+    // How far a place lies off the room, millimetres.
+    private double Outside(double x, double y) =>
+        Math.Max(0, Math.Abs(x) - (room.Width.ToDouble() / 2)) + Math.Max(0, Math.Abs(y) - (room.Height.ToDouble() / 2));
 }

@@ -49,7 +49,7 @@ internal sealed partial class WantMaker
         SourceSpan at = choice?.Span ?? want.Span;
         if (crossing.Points.Length == 1)
         {
-            if (choice is not null && choice.Kind is not (ChoiceKind.Nearest or ChoiceKind.FarthestFrom) && !Chosen(choice, crossing.Points[0], null, met))
+            if (choice is not null && !Chosen(choice, crossing.Points[0], null, met))
                 throw new FaultException(MakingFindings.OnlyCrossingFailsChoice(choice.ToString()!, $"it lies at {Place(crossing.Points[0])}", at));
             return bench.Cross(first, second, crossing.Points[0], 0, name);
         }
@@ -133,9 +133,9 @@ internal sealed partial class WantMaker
         switch (choice.Kind)
         {
             case ChoiceKind.Nearest or ChoiceKind.FarthestFrom:
+                Point from = evaluator.Point(choice.Of).Point;
                 if (other is null)
                     return true;
-                Point from = evaluator.Point(choice.Of).Point;
                 // Equal squared distances pick neither.
                 int nearer = Decider.Sign(other.SquaredDistanceTo(from) - here.SquaredDistanceTo(from));
                 return choice.Kind == ChoiceKind.Nearest ? nearer > 0 : nearer < 0;

@@ -21,7 +21,7 @@ internal sealed partial class WantMaker
         string name = evaluator.NameOf(want.Line);
         if (want.Toward is TowardDirection toward && evaluator.Evaluate(toward.Value) is PointValue aim)
         {
-            Apart(through, want.Through, aim, new Reference([], want.Toward.Span), want.Toward);
+            Apart(through, want.Through, aim, (Reference)toward.Value, want.Toward); // only a reference gives a point
             Bind(want.Line, constructions.Through(through.Mark, aim.Mark, name), through.Point);
             return;
         }

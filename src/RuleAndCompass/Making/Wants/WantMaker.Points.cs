@@ -137,13 +137,20 @@ internal sealed partial class WantMaker
     private List<IndexKey> Keys(Many many, int least)
     {
         IndexKey from = evaluator.Index(many.From), to = evaluator.Index(many.To);
-        Rational step = many.Step is null ? Rational.One : evaluator.Index(many.Step).Value;
-        if (step.Sign <= 0)
-            throw new FaultException(MakingFindings.BadLoop("a family's step is more than nothing", many.Span));
+        IndexKey step = many.Step is null ? new(QuantityKind.Number, Rational.One) : evaluator.Index(many.Step);
+        QuantityKind kind = from.Value.IsZero ? to.Kind : from.Kind;
+        if (to.Kind != kind && !to.Value.IsZero)
+            throw new FaultException(MakingFindings.BadLoop("both ends of a family's indices are of one kind", many.Span));
+        if (many.Step is null && kind != QuantityKind.Number)
+            throw new FaultException(MakingFindings.BadLoop("a family counted by lengths or angles needs a `step`", many.Span, "such as `step 10 mm` or `step 5°`"));
+        if (step.Kind != kind)
+            throw new FaultException(MakingFindings.BadLoop("a family's step is of the same kind as its ends", many.Step!.Span)); // without a step the kind is a number
+        if (step.Value.Sign <= 0)
+            throw new FaultException(MakingFindings.BadLoop("a family's step is more than nothing", many.Step?.Span ?? many.Span));
         List<IndexKey> keys = [];
-        for (Rational at = from.Value; at <= to.Value; at += step)
+        for (Rational at = from.Value; at <= to.Value; at += step.Value)
         {
-            keys.Add(new(from.Kind, at));
+            keys.Add(new(kind, at));
             if (keys.Count > 20_000)
                 throw new FaultException(MakingFindings.Limit("the family has too many points", "20000", many.Span));
         }
