@@ -83,6 +83,9 @@ public sealed record Comparison(
     SourceSpan Span,
     string? File)
 {
+    /// <summary>For a place that is timed: how its formula moves with the hour, across and up, in millimetres an hour.</summary>
+    public (double X, double Y)? PathRate { get; init; }
+
     /// <summary>The difference in minutes of time, where timed.</summary>
     public double? MinutesOfTime => RatePerHour is { } rate ? Difference.ToDouble() / rate * 60 : null;
 }
