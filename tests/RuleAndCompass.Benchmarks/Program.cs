@@ -6,12 +6,8 @@ if (args.Length > 0 && args[0] == "exact")
 if (args.Length > 0 && args[0] == "hand")
     return HandErrorBenchmark.Run(args.AsSpan(1));
 
-<<<<<<< HEAD
 if (args.Length > 0 && args[0] == "fuzz-numbers")
     return NumberFuzz.Run(args.AsSpan(1));
 
-Console.Error.WriteLine("usage: exact WORKLOAD [SIZE] | fuzz-numbers [COUNT [SEED]]");
-=======
-Console.Error.WriteLine("usage: exact WORKLOAD [SIZE] | hand trials SCRIPT [COUNT] | hand first-order [ACTS]");
->>>>>>> accuracy
+Console.Error.WriteLine("usage: exact WORKLOAD [SIZE] | hand trials SCRIPT [COUNT] | hand first-order [ACTS] | fuzz-numbers [COUNT [SEED]]");
 return 2;
