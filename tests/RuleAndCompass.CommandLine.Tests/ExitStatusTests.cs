@@ -178,6 +178,20 @@ public sealed class ExitStatusTests
     }
 
     [Fact]
+    public void An_interruption_in_the_middle_of_a_making_ends_with_130()
+    {
+        using Workshop workshop = new();
+        string script = workshop.Script("long.setout", "for i = 1 to 900000\n  let x = i * i\nend\n");
+        using CancellationTokenSource interrupt = new(TimeSpan.FromMilliseconds(30));
+
+        Ran ran = Workshop.RunWith("", interrupt.Token, "make", script, "-o", workshop.At("out"));
+
+        ran.Status.ShouldBe(130);
+        ran.Error.ShouldBe("setout: interrupted; nothing was left half written\n");
+        workshop.Files().ShouldBe(["long.setout"]);
+    }
+
+    [Fact]
     public void A_fault_of_the_program_is_one_sentence_without_a_trace()
     {
         using StringWriter error = new();
