@@ -82,6 +82,9 @@ public sealed class JsonTests
         diagonal.GetProperty("computed").GetString().ShouldBe("15");
         diagonal.GetProperty("difference").GetString().ShouldStartWith("2.3205080756887729");
         diagonal.GetProperty("verdict").GetString().ShouldBe("proved");
+        // 10√2: OEIS A002193; its seventeenth digit is a nought, which is as certain as the others.
+        Fits(Workshop.Run("report", workshop.Script("two.setout", "prick A at (0, 0)\nprick B at (10 mm, 10 mm)\ncompare distance A to B with 0\n"), "--json").Output)
+            .GetProperty("comparisons")[0].GetProperty("constructed").GetString().ShouldBe("14.142135623730950");
         corner.GetProperty("computed").GetProperty("x").GetString().ShouldBe("1");
         corner.GetProperty("difference").GetString().ShouldBe("1");
     }

@@ -28,7 +28,7 @@ public static class HandError
     {
         ArgumentNullException.ThrowIfNull(layout);
         options ??= new HandErrorOptions();
-        ImmutableArray<Diagnostic> faults = [.. HandChecks.Faults(layout.Hand, layout.Sheet, options)];
+        ImmutableArray<Diagnostic> faults = [.. HandChecks.Faults(layout, options)];
         if (faults.Length > 0)
             return new Outcome<HandErrorReport>(null, faults);
 

@@ -115,16 +115,6 @@ public sealed class FitnessTests
     }
 
     [Fact]
-    public void A_kit_without_dividers_can_set_nothing()
-    {
-        ActSequence acts = Fitting();
-        acts.Kit = Kit with { Dividers = null };
-        acts.SetFree(40);
-
-        Inspect(acts).Single().Code.ShouldBe("RC3104");
-    }
-
-    [Fact]
     public void A_line_longer_than_the_straightedge_counts_all_it_is_needed_over()
     {
         ActSequence acts = Fitting();
@@ -133,7 +123,7 @@ public sealed class FitnessTests
         acts.Keep("bar", line, new SegmentPiece(new Point(-200, 0), new Point(150, 0)));
 
         Diagnostic finding = Inspect(acts).Single();
-        finding.Code.ShouldBe("RC3105");
+        finding.Code.ShouldBe("RC3104");
         finding.Message.ShouldBe("act 3: `bar` is needed over 350 mm, and the straightedge is 300 mm long");
     }
 
@@ -149,7 +139,7 @@ public sealed class FitnessTests
         acts.Keep("m", longer, new SegmentPiece(first.Point, new Point(101, 0)));
 
         Diagnostic finding = Inspect(acts).Single();
-        finding.Code.ShouldBe("RC3107");
+        finding.Code.ShouldBe("RC3106");
         finding.Message.ShouldBe("act 4: `m` is laid to `A` and `B`, 5 mm apart, and used over 101 mm");
         finding.Hint.ShouldBe("lay it to points at least 5.1 mm apart, better half of its length; prick one farther out");
     }
@@ -165,7 +155,7 @@ public sealed class FitnessTests
         acts.Cross(bar, acts.Protract(acts.Slide(acts.Slide(bar, other), other), other, 14, "steep"), 0, "T");
 
         Diagnostic finding = Inspect(acts).Single();
-        finding.Code.ShouldBe("RC3106");
+        finding.Code.ShouldBe("RC3105");
         finding.Message.ShouldContain("`bar` and `steep` cross at 14°, so `T` is loose along them: 4 times the error of a square crossing");
         finding.Hint!.ShouldStartWith("find a line that crosses `bar` more squarely, or measure it along `bar` instead, ");
     }
@@ -179,7 +169,7 @@ public sealed class FitnessTests
         LineMark ray = acts.Lay(acts.Locate(-100, -10), acts.Locate(100, 0.5), "ray");
         acts.Cross(bar, ray, 0, "T");
 
-        Inspect(acts).Single(finding => finding.Code == "RC3106").Hint.ShouldBe("measure it along `bar` instead, 190 mm from `S`");
+        Inspect(acts).Single(finding => finding.Code == "RC3105").Hint.ShouldBe("measure it along `bar` instead, 190 mm from `S`");
     }
 
     [Fact]
@@ -204,7 +194,7 @@ public sealed class FitnessTests
         acts.Cross(acts.Swing(left, near), acts.Swing(right, near));
         acts.Cross(acts.Swing(left, acts.SetFree(20)), acts.Swing(acts.Locate(-40, 0), acts.SetFree(39.5)));
 
-        Inspect(acts).Where(finding => finding.Code == "RC3106").Select(finding => finding.Hint).ShouldBe(
+        Inspect(acts).Where(finding => finding.Code == "RC3105").Select(finding => finding.Hint).ShouldBe(
             ["larger openings cross more squarely", "openings nearer to each other cross more squarely"]);
     }
 
@@ -219,7 +209,7 @@ public sealed class FitnessTests
         acts.Locate(0.75 + apart, 0, "B");
 
         Diagnostic? finding = Inspect(acts).SingleOrDefault();
-        finding?.Code.ShouldBe("RC3108");
+        finding?.Code.ShouldBe("RC3107");
         finding?.Message.ShouldStartWith("act 2: `B` is pricked ");
         (finding is not null).ShouldBe(warned);
     }
