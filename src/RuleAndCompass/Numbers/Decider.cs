@@ -8,6 +8,10 @@ public sealed class Decider
 {
     private const int FirstBits = 128;
     private const int SuspectZero = -56;
+    private const int FewRoots = 16;
+
+    // Against sizes near 1 a double's interval after a hundred steps is below this.
+    private const double NearZero = 1e-9;
     private const int MostBitsUnresolved = 4096;
     private const int MostBitsUndecided = 2048;
 
@@ -34,6 +38,18 @@ public sealed class Decider
         if (SignOfEnclosure(x) is { } quick)
             return new Decision(quick, Verdict.Proved);
 
+        // A number that doubles cannot tell from zero is zero, nearly always: where the field is small, ask it before any ball.
+        WorkLimit limit = NewLimit();
+        bool? isZero = false;
+        StraightLine? line = LooksZero(x) ? StraightLine.Compile(x, Specific) : null;
+        bool asked = line is not null && line.Roots <= FewRoots && !line.HasLeaves;
+        if (asked)
+        {
+            isZero = DecideZero(x, line, limit, out Verdict? verdict);
+            if (isZero == true)
+                return new Decision(0, verdict!);
+        }
+
         int bits = FirstBits;
         for (; bits <= MostBitsUnresolved; bits *= 2)
         {
@@ -44,9 +60,12 @@ public sealed class Decider
                 break;
         }
 
-        bool? isZero = DecideZero(x, out Verdict? verdict);
-        if (isZero == true)
-            return new Decision(0, verdict!);
+        if (!asked)
+        {
+            isZero = DecideZero(x, line, limit, out Verdict? verdict);
+            if (isZero == true)
+                return new Decision(0, verdict!);
+        }
 
         // Not zero, or nobody knows: ever finer balls.
         int most = isZero == false ? options.MaximumBits : Math.Min(options.MaximumBits, MostBitsUndecided);
@@ -231,7 +250,7 @@ public sealed class Decider
     /// <summary>Whether <paramref name="x"/> is zero, by the field alone, whatever its enclosures say.</summary>
     internal bool IsExactlyZero(Real x, out Verdict verdict)
     {
-        bool? isZero = DecideZero(x, out Verdict? known);
+        bool? isZero = DecideZero(x, null, NewLimit(), out Verdict? known);
         verdict = known ?? Verdict.Proved;
         return isZero == true;
     }
@@ -252,19 +271,28 @@ public sealed class Decider
         return magnitude >= 0 ? 0 : (int)(-(long)magnitude * 30103 / 100000);
     }
 
-    private bool? DecideZero(Real x, out Verdict? verdict)
+    // Within rounding of zero as far as doubles know, beside the numbers it was made from.
+    private static bool LooksZero(Real x)
+    {
+        double size = Math.Max(-x.Low, x.High);
+        double beside = 1;
+        if (x is OperationReal { Operation: Operation.Add or Operation.Subtract } sum)
+            beside = Math.Max(Math.Abs(sum.Left.High), Math.Abs(sum.Right!.High));
+        return size < beside * NearZero;
+    }
+
+    private bool? DecideZero(Real x, StraightLine? line, WorkLimit limit, out Verdict? verdict)
     {
         verdict = null;
-        WorkLimit limit = NewLimit();
-        List<Real> leaves = StraightLine.LeavesOf(x);
-        if (leaves.Count > 0)
+        line ??= StraightLine.Compile(x, Specific);
+        if (line is null || line.HasLeaves)
         {
+            List<Real> leaves = StraightLine.LeavesOf(x);
             verdict = new GenericPoint(leaves, random, limit).TryVanishing(x, MaximumDegree);
             if (verdict is not null)
                 return true;
         }
 
-        StraightLine? line = StraightLine.Compile(x, Specific);
         if (line is null)
         {
             verdict = CyclotomicField.TryVanishing(x, random, limit);
