@@ -204,9 +204,19 @@ public sealed class Decider
 
             // 10^(magnitude) ≤ |x| up to one too many, which the rounding below puts right.
             int magnitude = (int)Math.Floor((BigInteger.Log10(BigInteger.Abs(ball.Middle)) + ball.Exponent * 0.30102999566398120));
-            string text = DecimalText.Write(RoundedAt(x, significantDigits - 1 - magnitude), significantDigits - 1 - magnitude, trim: true);
-            return text;
+            int places = significantDigits - 1 - magnitude;
+            BigInteger rounded = RoundedAt(x, places);
+            return DecimalText.Write(rounded, places, trim: Ends(x, rounded, places));
         }
+    }
+
+    // A nought at the end is left out only where the decimal ends there; else it is a certain digit like any other.
+    private bool Ends(Real x, BigInteger rounded, int places)
+    {
+        if (!(rounded % 10).IsZero)
+            return true;
+        Rational value = places >= 0 ? new(rounded, BigInteger.Pow(10, places)) : rounded * BigInteger.Pow(10, -places);
+        return x.TryGetRational(out Rational exact) ? exact == value : Decide(x - value).IsZero;
     }
 
     /// <summary>A decimal rounded to <paramref name="places"/> decimals, certain.</summary>
