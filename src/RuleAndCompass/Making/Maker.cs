@@ -212,7 +212,7 @@ public sealed partial class Maker
                 Claim(claim);
                 break;
             case CompareSentence compare:
-                comparisons.Add(new ComparisonMaker(evaluator, decider).Compare(compare, followed?.Span, Add));
+                comparisons.Add(decider.Recording(() => new ComparisonMaker(evaluator, decider).Compare(compare, followed?.Span, Add)));
                 break;
             case KeepSentence keep:
                 kept.AddRange(new Keeping(evaluator, decider).Keep(keep));
@@ -364,7 +364,7 @@ public sealed partial class Maker
                 break;
             }
 
-            (bool? holds, Verdict verdict) = new Conditions(evaluator, decider).Test(condition);
+            (bool? holds, Verdict verdict) = decider.Recording(() => new Conditions(evaluator, decider).Test(condition));
             if (holds is null)
                 throw new FaultException(MakingFindings.Undecided($"whether `{condition}`", verdict, condition.Span));
             if (holds.Value)
@@ -471,7 +471,7 @@ public sealed partial class Maker
     {
         Conditions conditions = new(evaluator, decider);
         string says = conditions.Says(claim.Condition);
-        (bool? holds, Verdict verdict) = conditions.Test(claim.Condition);
+        (bool? holds, Verdict verdict) = decider.Recording(() => conditions.Test(claim.Condition));
         string? by = holds == false ? conditions.ByHowMuch : null;
         claims.Add(new(says, holds, verdict, by, followed?.Span ?? claim.Span, null));
         if (holds == false)
