@@ -77,6 +77,13 @@ internal readonly struct Interval(double low, double high)
         return new(a.Low <= 0 && a.High >= 0 ? 0 : Math.Max(0, square.Low), square.High);
     }
 
+    /// <summary>What lies in both of two intervals that hold one number; one alone where rounding parts them.</summary>
+    public static Interval Meet(Interval a, Interval b)
+    {
+        double low = Math.Max(a.Low, b.Low), high = Math.Min(a.High, b.High);
+        return low <= high ? new(low, high) : a;
+    }
+
     private static Interval Hull(double p, double q, double r, double s) => Outward(Math.Min(Math.Min(p, q), Math.Min(r, s)), Math.Max(Math.Max(p, q), Math.Max(r, s)));
 
     private static Interval Outward(double low, double high)

@@ -29,11 +29,17 @@ internal sealed class ValidRange
     private readonly StraightLine line;
     private readonly List<Range> ranges = [];
     private readonly Interval[] values;
+    private readonly Interval[] middles;
+    private readonly Interval[] slopes;
+    private Range? moving;
+    private Interval reach;
 
     private ValidRange(Real x)
     {
         line = StraightLine.Compile(x, leaf => leaf)!; // every leaf is kept
         values = new Interval[line.Count];
+        middles = new Interval[line.Count];
+        slopes = new Interval[line.Count];
         foreach (Real leaf in line.Leaves.Values)
             switch (leaf)
             {
@@ -108,6 +114,7 @@ internal sealed class ValidRange
     private (double Low, double High)? RunAboutValue(Range range)
     {
         List<(double Low, double High)> pieces = [];
+        moving = range;
         Split(range.From!.Value, range.To!.Value, 0); // only a declared range comes here
         (double Low, double High)? run = null;
         double value = range.Value.ToDouble();
@@ -126,6 +133,8 @@ internal sealed class ValidRange
         void Split(double low, double high, int depth)
         {
             (range.Low, range.High) = (low, high);
+            double half = Math.BitIncrement((high - low) / 2);
+            reach = new(Math.BitDecrement(-half), Math.BitIncrement(half));
             if (Holds())
             {
                 pieces.Add((low, high));
@@ -176,43 +185,70 @@ internal sealed class ValidRange
             StraightLine.Instruction step = line[at];
             if (line.Leaves.TryGetValue(at, out Real? leaf))
             {
-                values[at] = Over(leaf);
+                (values[at], middles[at], slopes[at]) = Over(leaf);
                 continue;
             }
 
             if (step.IsConstant)
             {
-                values[at] = Interval.Of(step.Value);
+                (values[at], middles[at], slopes[at]) = (Interval.Of(step.Value), Interval.Of(step.Value), default);
                 continue;
             }
 
             Interval left = values[step.Left], right = values[step.Right];
             if ((step.Operation == Operation.Divide && right.Low <= 0 && right.High >= 0) || (step.Operation == Operation.Sqrt && !(left.Low > 0)))
                 return false;
-            values[at] = step.Left == step.Right && step.Operation == Operation.Multiply ? Interval.Square(left) : Interval.Apply(step.Operation, left, right);
+            bool isSquare = step.Left == step.Right && step.Operation == Operation.Multiply;
+            Interval value = isSquare ? Interval.Square(left) : Interval.Apply(step.Operation, left, right);
+            middles[at] = Interval.Apply(step.Operation, middles[step.Left], middles[step.Right]);
+            slopes[at] = Slope(step, value);
+            // The mean value form is the sharper the smaller the piece: Moore (1979), §3.3.
+            values[at] = moving is null ? value : Interval.Meet(value, Interval.Apply(Operation.Add, middles[at], Interval.Apply(Operation.Multiply, slopes[at], reach)));
         }
 
         return true;
     }
 
-    // What a leaf may be while the givens are anywhere in their pieces.
-    private Interval Over(Real leaf)
+    // How fast the number may change with the one given that moves.
+    private Interval Slope(StraightLine.Instruction step, Interval value)
+    {
+        Interval left = slopes[step.Left], right = slopes[step.Right];
+        switch (step.Operation)
+        {
+            case Operation.Add or Operation.Subtract:
+                return Interval.Apply(step.Operation, left, right);
+            case Operation.Multiply:
+                return Interval.Apply(Operation.Add, Interval.Apply(Operation.Multiply, left, values[step.Right]), Interval.Apply(Operation.Multiply, values[step.Left], right));
+            case Operation.Divide:
+                Interval changed = Interval.Apply(Operation.Subtract, left, Interval.Apply(Operation.Multiply, value, right));
+                return Interval.Apply(Operation.Divide, changed, values[step.Right]);
+            case Operation.Sqrt:
+                return Interval.Apply(Operation.Divide, left, Interval.Apply(Operation.Add, value, value));
+            default:
+                return Interval.Everything;
+        }
+    }
+
+    // What a leaf may be while the givens are anywhere in their pieces, in the middle of the piece, and how fast it changes.
+    private (Interval Value, Interval Middle, Interval Slope) Over(Real leaf)
     {
         switch (leaf)
         {
-            case DirectionReal direction:
-                Range? turned = ranges.Find(range => ReferenceEquals(range.Source, direction.Source));
-                return turned is null
-                    ? new(direction.Low, direction.High)
-                    : Turned(turned.Low * direction.Multiple.ToDouble(), turned.High * direction.Multiple.ToDouble(), direction.IsSine);
-            case GivenReal given:
-                Range? known = ranges.Find(range => ReferenceEquals(range.Leaf, given));
-                return known is null ? new(given.Low, given.High) : new(known.Low, known.High);
+            case DirectionReal direction when ranges.Find(range => ReferenceEquals(range.Source, direction.Source)) is { } turned:
+                double multiple = direction.Multiple.ToDouble(), middle = (turned.Low + turned.High) / 2;
+                Interval slope = direction.IsSine
+                    ? Turned(turned.Low * multiple, turned.High * multiple, false)
+                    : Interval.Apply(Operation.Subtract, default, Turned(turned.Low * multiple, turned.High * multiple, true));
+                Interval perDegree = Interval.Apply(Operation.Multiply, slope, new(Math.BitDecrement(multiple * Math.PI / 180), Math.BitIncrement(multiple * Math.PI / 180)));
+                return (Turned(turned.Low * multiple, turned.High * multiple, direction.IsSine), Turned(middle * multiple, middle * multiple, direction.IsSine), ReferenceEquals(turned, moving) ? perDegree : default);
+            case GivenReal given when ranges.Find(range => ReferenceEquals(range.Leaf, given)) is { } known:
+                double centre = (known.Low + known.High) / 2;
+                return (new(known.Low, known.High), new(centre, centre), ReferenceEquals(known, moving) ? new(1, 1) : default);
             case OperationReal:
                 // The degrees of a vector that may itself depend on the givens.
-                return Interval.Everything;
+                return (Interval.Everything, Interval.Everything, Interval.Everything);
             default:
-                return new(leaf.Low, leaf.High);
+                return (new(leaf.Low, leaf.High), new(leaf.Low, leaf.High), default);
         }
     }
 
@@ -220,6 +256,8 @@ internal sealed class ValidRange
     {
         double low = Math.Min(first, second) - TrigonometricMargin - (isSine ? 90 : 0), high = Math.Max(first, second) + TrigonometricMargin - (isSine ? 90 : 0);
         // cos falls from a whole turn to the half turn and climbs back: its greatest and least stand at multiples of 180°.
+        if (!(Math.Abs(low) < 1e6 && Math.Abs(high) < 1e6))
+            return new(-1, 1);
         double a = Math.Cos(low * Math.PI / 180), b = Math.Cos(high * Math.PI / 180);
         double least = Math.Min(a, b), greatest = Math.Max(a, b);
         if (Math.Ceiling(low / 360) * 360 <= high)
