@@ -420,11 +420,12 @@ internal sealed class StepPlateComposer
             Box box = Box.Of(row.Left + (i * (width + gap)), top, width, pictureHeight);
             double factor = Math.Min(box.Width / tracing.Sheet.Width, box.Height / tracing.Sheet.Height) * 0.94;
             View small = new(box.Middle, factor, box);
+            bool isBare = !tracing.Traces.Any(trace => trace is not PointTrace && layout.Acts[trace.Act - 1].Stage == stage);
             foreach (Trace trace in tracing.Traces)
             {
                 if (layout.Acts[trace.Act - 1].Stage == stage)
                 {
-                    if (trace is PointTrace point && box.Holds(small.OnPage(point.At)))
+                    if (isBare && trace is PointTrace point && box.Holds(small.OnPage(point.At)))
                     {
                         canvas.Fill(Role.Thumbnail, Outline.Circle(small.OnPage(point.At), 0.22), Ink.Black);
                     }
