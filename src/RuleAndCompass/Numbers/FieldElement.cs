@@ -34,15 +34,22 @@ internal sealed record FieldElement(ulong Generators, BigInteger[] Coefficients,
     public FieldElement Over(BigInteger divisor) =>
         divisor.Sign < 0 ? Negated().Over(-divisor) : Normal(Generators, (BigInteger[])Coefficients.Clone(), Denominator * divisor);
 
-    public FieldElement Times(BigInteger factor)
+    public FieldElement Times(BigInteger factor) => Scaled(factor, BigInteger.One);
+
+    /// <summary>This element times <paramref name="factor"/> over <paramref name="divisor"/>, which is not zero.</summary>
+    public FieldElement Scaled(BigInteger factor, BigInteger divisor)
     {
         if (factor.IsZero)
             return Zero;
+        if (factor.IsOne && divisor.IsOne)
+            return this;
+        if (divisor.Sign < 0)
+            (factor, divisor) = (-factor, -divisor);
 
         var coefficients = new BigInteger[Coefficients.Length];
         for (int i = 0; i < coefficients.Length; i++)
-            coefficients[i] = Coefficients[i] * factor;
-        return Normal(Generators, coefficients, Denominator);
+            coefficients[i] = Coefficients[i].IsZero ? BigInteger.Zero : Coefficients[i] * factor;
+        return Lowest(Generators, coefficients, divisor.IsOne ? Denominator : Denominator * divisor);
     }
 
     public bool SameAs(FieldElement other) => Generators == other.Generators
@@ -72,6 +79,11 @@ internal sealed record FieldElement(ulong Generators, BigInteger[] Coefficients,
             generators &= ~(rest & (~rest + 1));
         }
 
+        return Lowest(generators, coefficients, denominator);
+    }
+
+    private static FieldElement Lowest(ulong generators, BigInteger[] coefficients, BigInteger denominator)
+    {
         if (!denominator.IsOne)
         {
             BigInteger common = denominator;

@@ -37,6 +37,10 @@ internal sealed class Tower(WorkLimit limit)
     {
         if (a.IsZero || b.IsZero)
             return FieldElement.Zero;
+        if (a.IsRational)
+            return b.Scaled(a.Coefficients[0], a.Denominator);
+        if (b.IsRational)
+            return a.Scaled(b.Coefficients[0], b.Denominator);
 
         ulong all = Closed(a.Generators | b.Generators, a.Generators & b.Generators);
         int[] levels = FieldElement.Levels(all);
@@ -52,11 +56,21 @@ internal sealed class Tower(WorkLimit limit)
         if (a.IsRational)
             return FieldElement.Of(Rational.One / a.ToRational());
 
+        // Of the numerator alone, in integers: the product with the conjugates, and the norm.
+        (FieldElement cofactor, BigInteger norm) = Cofactor(a.Denominator.IsOne ? a : a with { Denominator = BigInteger.One });
+        return cofactor.Scaled(a.Denominator, norm);
+    }
+
+    // a × cofactor = norm, all integral.
+    private (FieldElement Cofactor, BigInteger Norm) Cofactor(FieldElement a)
+    {
+        if (a.IsRational)
+            return (FieldElement.Of(BigInteger.One), a.Coefficients[0]);
+
         (FieldElement low, FieldElement high, int top) = Split(a);
-        FieldElement radicand = RadicandOf(top);
-        FieldElement norm = Subtract(Multiply(low, low), Multiply(Multiply(high, high), radicand));
-        FieldElement inverse = Invert(norm);
-        return Multiply(Join(low, high.Negated(), top), inverse);
+        FieldElement norm = Subtract(Multiply(low, low), Multiply(Multiply(high, high), RadicandOf(top)));
+        (FieldElement rest, BigInteger last) = Cofactor(norm);
+        return (Multiply(Join(low, high.Negated(), top), rest), last);
     }
 
     /// <summary>The root that is not negative of an element that is not negative; the field grows where it has none.</summary>
