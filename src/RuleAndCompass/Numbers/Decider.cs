@@ -215,7 +215,7 @@ public sealed class Decider
     {
         if (!(rounded % 10).IsZero)
             return true;
-        Rational value = places >= 0 ? new(rounded, BigInteger.Pow(10, places)) : rounded * BigInteger.Pow(10, -places);
+        Rational value = places >= 0 ? new Rational(rounded, BigInteger.Pow(10, places)) : rounded * BigInteger.Pow(10, -places);
         return x.TryGetRational(out Rational exact) ? exact == value : Decide(x - value).IsZero;
     }
 
