@@ -12,9 +12,6 @@ namespace RuleAndCompass.Making;
 /// <summary>Works out expressions: exact values with their kinds, and how they follow from marks and loop variables.</summary>
 internal sealed class Evaluator(Decider decider)
 {
-    private static readonly string[] Functions =
-        ["sqrt", "sin", "cos", "tan", "asin", "acos", "atan", "abs", "min", "max", "whole", "remainder", "declination", "sun_correction"];
-
     /// <summary>What names stand for, just now.</summary>
     public Scope Scope { get; set; } = new(null, "");
 
@@ -138,7 +135,7 @@ internal sealed class Evaluator(Decider decider)
         if (value is null)
             throw new FaultException(MakingFindings.UnknownName(first.Name.Text, NearName.Find(first.Name.Text, Scope.Names), first.Name.Span));
         value = Member(value, first);
-        for (int next = 1; next < reference.Steps.Length; next++)
+        for (int next = 1; next < reference.Steps.Length && value is not UnboundValue; next++)
         {
             Bound step = reference.Steps[next];
             if (value is not GivenByRecipe gave)
@@ -170,7 +167,15 @@ internal sealed class Evaluator(Decider decider)
         Value value = Resolve(reference);
         if (value is TValue fits)
             return fits;
-        string? hint = value is FamilyValue ? "say which one: `" + reference + "[…]`" : null;
+        string? hint = value is FamilyValue
+            ? "say which one: `" + reference + "[…]`"
+            : needed switch
+            {
+                "a point" => "points are made by `prick`",
+                "a line" => "lines are made by `rule`",
+                "a circle" => "circles are made by `strike`",
+                _ => null,
+            };
         throw new FaultException(MakingFindings.WrongKind(reference.ToString()!, value.KindWithArticle, needed, reference.Span, hint));
     }
 
@@ -269,7 +274,9 @@ internal sealed class Evaluator(Decider decider)
                 {
                     (QuantityValue { Dimension: 1 }, QuantityValue { Dimension: 0 }) or (QuantityValue { Dimension: 0 }, QuantityValue { Dimension: 1 }) => "write the number's unit, as in `30 mm`",
                     (AngleValue, QuantityValue { Dimension: 0 }) or (QuantityValue { Dimension: 0 }, AngleValue) => "write the number's unit, as in `15°`",
-                    _ => null,
+                    _ when sum => "only things of one kind are added or taken away",
+                    (PointValue or LineValue or CircleValue, _) or (_, PointValue or LineValue or CircleValue) => "figures are not reckoned with; take a measure of one, such as `distance A to B`",
+                    _ => "lengths and numbers are multiplied and divided, and an angle by a number",
                 };
                 throw new FaultException(MakingFindings.KindsDoNotFit(left.KindWithArticle, word, right.KindWithArticle, arithmetic.Span, hint));
         }
@@ -290,29 +297,26 @@ internal sealed class Evaluator(Decider decider)
         {
             case "sqrt":
             {
-                Count(call, 1);
                 QuantityValue under = Quantity(call.Arguments[0]);
                 if (under.Dimension % 2 != 0)
                     throw new FaultException(MakingFindings.WrongKind(call.Arguments[0].ToString()!, under.KindWithArticle, "a number or an area", call.Arguments[0].Span, "a length times a length is an area, and its root a length"));
                 if (decider.Sign(under.Amount) < 0)
-                    throw new FaultException(MakingFindings.RootOfNegative(decider.ToFixed(under.Amount, 6), call.Arguments[0].Span));
+                    throw new FaultException(MakingFindings.RootOfNegative(Written(under), call.Arguments[0].Span));
                 return new QuantityValue(Real.Sqrt(under.Amount), under.Dimension / 2, Traced(name, under.Trace));
             }
 
             case "sin" or "cos" or "tan":
             {
-                Count(call, 1);
                 AngleValue of = AngleValueOf(call.Arguments[0]);
                 return new QuantityValue(Trigonometric(name, of.Angle, call.Arguments[0].Span), 0, Traced(name, of.Trace));
             }
 
             case "asin" or "acos":
             {
-                Count(call, 1);
                 QuantityValue of = Number(call.Arguments[0]);
                 Real square = 1 - (of.Amount * of.Amount);
                 if (decider.Sign(square) < 0)
-                    throw new FaultException(MakingFindings.OutsideDomain($"`{name}` takes a number from -1 to 1, and this is {decider.ToFixed(of.Amount, 6)}", call.Arguments[0].Span));
+                    throw new FaultException(MakingFindings.OutsideDomain($"`{name}` takes a number from -1 to 1, and this is {Written(of)}", call.Arguments[0].Span, $"no angle has such a {(name == "asin" ? "sine" : "cosine")}; look at the figures it is worked out from"));
                 Real other = Real.Sqrt(square);
                 return new AngleValue(name == "asin" ? Angle.OfVector(other, of.Amount) : Angle.OfVector(of.Amount, other), Traced(name, of.Trace));
             }
@@ -325,40 +329,34 @@ internal sealed class Evaluator(Decider decider)
 
             case "atan":
             {
-                Count(call, 2, "one number, or two of one kind: `atan(y, x)`");
                 (QuantityValue y, QuantityValue x) = OneKind(call, 0, 1);
                 if (decider.IsZero(y.Amount) && decider.IsZero(x.Amount))
-                    throw new FaultException(MakingFindings.OutsideDomain("`atan(0, 0)` is no angle", call.Span));
+                    throw new FaultException(MakingFindings.OutsideDomain("`atan` of nothing and nothing is no angle", call.Span, "one of its two values must be more or less than nothing"));
                 return new AngleValue(Angle.OfVector(x.Amount, y.Amount), Traced(name, y, x));
             }
 
             case "abs":
             {
-                Count(call, 1);
                 Value of = Evaluate(call.Arguments[0]);
                 if (of is AngleValue angle)
-                    return decider.Sign(angle.Angle.Degrees) < 0 ? new AngleValue(-angle.Angle, Traced("-", angle.Trace)) : angle;
+                    return decider.Recording(() => decider.Sign(angle.Angle.Degrees)) < 0 ? new AngleValue(-angle.Angle, Traced("-", angle.Trace)) : angle;
                 QuantityValue quantity = Quantity(call.Arguments[0]);
-                return decider.Sign(quantity.Amount) < 0 ? new QuantityValue(-quantity.Amount, quantity.Dimension, Traced("-", quantity.Trace)) : quantity;
+                return decider.Recording(() => decider.Sign(quantity.Amount)) < 0 ? new QuantityValue(-quantity.Amount, quantity.Dimension, Traced("-", quantity.Trace)) : quantity;
             }
 
             case "min" or "max":
             {
-                if (call.Arguments.IsEmpty)
-                    Count(call, 1);
                 return call.Arguments.Select(Evaluate).Aggregate((best, next) => IsLess(next, best, call) == (name == "min") ? next : best);
             }
 
             case "whole":
             {
-                Count(call, 1);
                 QuantityValue of = Number(call.Arguments[0]);
                 return new QuantityValue(Floor(of.Amount, call.Span), 0);
             }
 
             case "remainder":
             {
-                Count(call, 2);
                 if (Evaluate(call.Arguments[0]) is AngleValue turned)
                 {
                     AngleValue part = AngleValueOf(call.Arguments[1]);
@@ -374,19 +372,17 @@ internal sealed class Evaluator(Decider decider)
 
             case "declination" or "sun_correction":
             {
-                if (call.Arguments.Length is not (2 or 3))
-                    Count(call, 2, "a month and a day, and a year where one is meant");
                 int month = Whole(call.Arguments[0]), day = Whole(call.Arguments[1]);
                 int? year = call.Arguments.Length == 3 ? Whole(call.Arguments[2]) : null;
                 if (year is < 1800 or > 2200)
-                    throw new FaultException(MakingFindings.OutsideDomain($"the sun's series is used from 1800 to 2200, and this is {year}", call.Arguments[2].Span));
+                    throw new FaultException(MakingFindings.OutsideDomain($"the sun's series is good from 1800 to 2200, and this is {year}", call.Arguments[2].Span, "leave the year out for the mean of the years about now"));
                 if (!Sun.IsDay(month, day, year))
-                    throw new FaultException(MakingFindings.OutsideDomain($"month {month} has no day {day}", call.Span));
+                    throw new FaultException(MakingFindings.OutsideDomain(month is < 1 or > 12 ? $"there is no month {month}" : $"month {month} has no day {day}", call.Span, "the month comes first, then the day: `declination(6, 21)`"));
                 return new AngleValue(Angle.FromDegrees(name == "declination" ? Sun.Declination(month, day, year) : Sun.Correction(month, day, year)));
             }
 
             default:
-                throw new FaultException(MakingFindings.UnknownFunction(name, NearName.Find(name, Functions), call.Function.Span));
+                throw new UnreachableException($"No function {name}: the reader knows them all.");
         }
     }
 
@@ -398,7 +394,7 @@ internal sealed class Evaluator(Decider decider)
             return angle.Cosine;
         (Real x, Real y) = angle.Vector;
         if (decider.IsZero(x))
-            throw new FaultException(MakingFindings.OutsideDomain("the tangent of this angle is without end", span, "at a right angle the two lines are parallel; leave that case out with `when`"));
+            throw new FaultException(MakingFindings.OutsideDomain("an angle of 90° has no tangent", span, "leave that case out with `when`; a line at 90° is ruled `square to`"));
         return y / x;
     }
 
@@ -504,10 +500,11 @@ internal sealed class Evaluator(Decider decider)
         return (a, b);
     }
 
-    private static void Count(Call call, int count, string? takes = null)
+    /// <summary>A quantity as a finding tells it, with its unit.</summary>
+    public string Written(QuantityValue quantity)
     {
-        if (call.Arguments.Length != count)
-            throw new FaultException(MakingFindings.OutsideDomain($"`{call.Function.Text}` takes {takes ?? (count == 1 ? "one value" : $"{count} values")}, and here are {call.Arguments.Length}", call.Span));
+        string unit = quantity.Dimension switch { 0 => "", 1 => " mm", 2 => " mm²", _ => $" mm^{quantity.Dimension}" };
+        return (quantity.Amount.TryGetRational(out Rational exact) ? ValueText.Plain(exact) : decider.ToDecimal(quantity.Amount, 6)) + unit;
     }
 
     private string Formed(ValuePiece piece)

@@ -1,3 +1,4 @@
+using System.Diagnostics;
 using System.Globalization;
 using RuleAndCompass.Bench;
 using RuleAndCompass.Language.Diagnostics;
@@ -42,24 +43,9 @@ internal sealed class Head
     public static Head Of(Script script, MakingOptions options, List<Diagnostic> findings)
     {
         Head head = new(findings);
-        HashSet<Type> seen = [];
-        bool workBegun = false;
+        // The reader lets each stand once, and before the first want.
         foreach (Sentence sentence in script.Sentences)
-        {
-            if (sentence is TitleSentence or SheetSentence or BoardSentence or KitSentence or HandSentence)
-            {
-                string word = sentence switch { TitleSentence => "title", SheetSentence => "sheet", BoardSentence => "board", KitSentence => "kit", _ => "hand" };
-                if (!seen.Add(sentence.GetType()))
-                    findings.Add(MakingFindings.HeadOutOfPlace($"a second `{word}`", sentence.Span, "one is enough"));
-                else if (workBegun)
-                    findings.Add(MakingFindings.HeadOutOfPlace($"`{word}` stands after the work has begun", sentence.Span, "the title, sheet, board, kit and hand come before the first want"));
-                else
-                    head.Take(sentence);
-            }
-
-            workBegun |= sentence is WantSentence or ForBlock or WhenBlock or FollowSentence;
-        }
-
+            head.Take(sentence);
         head.TakeText("sheet", options.Sheet);
         head.TakeText("kit", options.Kit);
         head.TakeText("hand", options.Hand);
@@ -118,7 +104,7 @@ internal sealed class Head
         {
             (string found, Rational width, Rational height) = Standard.FirstOrDefault(size => size.Name.Equals(name.Text, StringComparison.OrdinalIgnoreCase));
             if (found is null)
-                throw new FaultException(MakingFindings.UnknownSheet(name.Text, name.Span));
+                throw new UnreachableException($"No sheet {name.Text}: the reader knows them all.");
             return sentence.Orientation == Orientation.Sideways ? new($"{found} sideways", height, width) : new($"{found} upright", width, height);
         }
 

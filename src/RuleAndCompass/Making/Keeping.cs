@@ -66,7 +66,7 @@ internal sealed class Keeping(Evaluator evaluator, Decider decider)
         PointValue at = evaluator.Point(sentence.At);
         Real height = evaluator.Length(sentence.Height).Amount;
         if (decider.Sign(height) <= 0)
-            throw new FaultException(MakingFindings.NotPositive("the lettering's height", $"{decider.ToFixed(height, 3)} mm", sentence.Height.Span));
+            throw new FaultException(MakingFindings.NotPositive("the lettering's height", $"{ValueText.Decimals(height.ToDouble(), 3)} mm", sentence.Height.Span));
         LetteringLie lie = sentence.Lie switch
         {
             null => new StraightLie(0),
@@ -322,7 +322,7 @@ internal sealed class Keeping(Evaluator evaluator, Decider decider)
         {
             Real size = evaluator.Length(width).Amount;
             if (decider.Sign(size) <= 0)
-                throw new FaultException(MakingFindings.NotPositive("the hole's width", $"{decider.ToFixed(size, 3)} mm", width.Span));
+                throw new FaultException(MakingFindings.NotPositive("the hole's width", $"{ValueText.Decimals(size.ToDouble(), 3)} mm", width.Span));
             drill = size.ToDouble();
         }
 

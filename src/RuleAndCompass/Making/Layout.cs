@@ -182,6 +182,11 @@ public sealed record Layout(
     ImmutableArray<Lettering> Letterings,
     bool IsDial)
 {
+    /// <summary>For each given that choices, claims and comparisons depend on: over which values they all stay as they are. Worked out when first asked for.</summary>
+    public ImmutableArray<ValidFor> ValidRanges => validRanges ??= Decider.FindRanges();
+
+    private ImmutableArray<ValidFor>? validRanges;
+
     /// <summary>Decides and prints exact values for reports of this layout.</summary>
     public required Decider Decider { get; init; }
 }

@@ -132,7 +132,7 @@ public sealed partial class Maker
         int stageBefore = stages.Current;
         for (int index = 0; index < sentences.Length; index++)
         {
-            CarryOut(sentences[index], outermost);
+            CarryOut(sentences[index]);
             if (outermost)
                 progress?.Report((index + 1.0) / sentences.Length);
         }
@@ -140,12 +140,12 @@ public sealed partial class Maker
         stages.Close(stageBefore, bench.Acts.Count);
     }
 
-    private void CarryOut(Sentence sentence, bool outermost)
+    private void CarryOut(Sentence sentence)
     {
         Count(sentence.Span);
         try
         {
-            Dispatch(sentence, outermost);
+            Dispatch(sentence);
         }
         catch (FaultException fault) when (fault.Ends == FaultEnds.Sentence || (fault.Ends == FaultEnds.Recipe && sentence is FollowSentence))
         {
@@ -173,28 +173,22 @@ public sealed partial class Maker
             throw new FaultException(Placed(MakingFindings.Limit("the time allowed has run out here", $"{options.TimeLimit!.Value.TotalSeconds:0.#} s", at, "raise `--time-limit`")), FaultEnds.Making);
     }
 
-    private void Dispatch(Sentence sentence, bool outermost)
+    private void Dispatch(Sentence sentence)
     {
         switch (sentence)
         {
-            case TitleSentence or SheetSentence or BoardSentence or KitSentence or HandSentence:
-                if (!outermost)
-                    throw new FaultException(MakingFindings.HeadOutOfPlace("a head sentence stands in a block", sentence.Span, "the title, sheet, board, kit and hand come first in a script"));
+            case TitleSentence or SheetSentence or BoardSentence or KitSentence or HandSentence or UseSentence or RecipeBlock:
+                // Taken before the work begins; the reader lets them stand outermost only.
                 break;
-            case UseSentence or RecipeBlock when outermost:
-                break;
-            case UseSentence or RecipeBlock:
-                throw new FaultException(MakingFindings.HeadOutOfPlace("recipes are written outside every block", sentence.Span));
             case NoteSentence note:
                 if (followed is null)
                     notes.Add(evaluator.Text(note.Text));
                 break;
-            case TradeSentence or SourceSentence or NeedsSentence or GivesSentence when followed is not null:
-                break;
             case TradeSentence or SourceSentence or NeedsSentence or GivesSentence:
-                throw new FaultException(MakingFindings.HeadOutOfPlace("this sentence belongs in a recipe", sentence.Span));
+                // The recipe has them.
+                break;
             case GivenSentence given:
-                Given(given, outermost);
+                Given(given);
                 break;
             case LetSentence let:
                 Value named = evaluator.Evaluate(let.Value);
@@ -218,7 +212,7 @@ public sealed partial class Maker
                 Claim(claim);
                 break;
             case CompareSentence compare:
-                comparisons.Add(new ComparisonMaker(evaluator, decider).Compare(compare, followed?.Span, Add));
+                comparisons.Add(decider.Recording(() => new ComparisonMaker(evaluator, decider).Compare(compare, followed?.Span, Add)));
                 break;
             case KeepSentence keep:
                 kept.AddRange(new Keeping(evaluator, decider).Keep(keep));
@@ -256,10 +250,8 @@ public sealed partial class Maker
         }
     }
 
-    private void Given(GivenSentence given, bool outermost)
+    private void Given(GivenSentence given)
     {
-        if (!outermost)
-            throw new FaultException(MakingFindings.BadGiven("a `given` stands outside every block", given.Span, "inside one, write `let`"));
         string name = given.Name.Text;
         givenNames.Add(name);
         Value written = evaluator.Evaluate(given.Value);
@@ -372,7 +364,7 @@ public sealed partial class Maker
                 break;
             }
 
-            (bool? holds, Verdict verdict) = new Conditions(evaluator, decider).Test(condition);
+            (bool? holds, Verdict verdict) = decider.Recording(() => new Conditions(evaluator, decider).Test(condition));
             if (holds is null)
                 throw new FaultException(MakingFindings.Undecided($"whether `{condition}`", verdict, condition.Span));
             if (holds.Value)
@@ -479,7 +471,7 @@ public sealed partial class Maker
     {
         Conditions conditions = new(evaluator, decider);
         string says = conditions.Says(claim.Condition);
-        (bool? holds, Verdict verdict) = conditions.Test(claim.Condition);
+        (bool? holds, Verdict verdict) = decider.Recording(() => conditions.Test(claim.Condition));
         string? by = holds == false ? conditions.ByHowMuch : null;
         claims.Add(new(says, holds, verdict, by, followed?.Span ?? claim.Span, null));
         if (holds == false)

@@ -7,12 +7,9 @@ namespace RuleAndCompass.Making;
 internal static class MakingFindings
 {
     public static Diagnostic UnknownName(string name, string? near, SourceSpan span) =>
-        Error("RC2001", $"nothing is called `{name}`", span, near is null ? "bind it in an earlier sentence" : $"is `{near}` meant?");
+        Error("RC2001", $"nothing is called `{name}`", span, near is null ? $"make it in an earlier sentence: `prick`, `rule`, `strike` or `let {name} = …`" : $"is `{near}` meant?");
 
-    public static Diagnostic UnknownFunction(string name, string? near, SourceSpan span) =>
-        Error("RC2001", $"there is no function `{name}`", span, near is null ? "`sqrt sin cos tan asin acos atan abs min max whole remainder declination sun_correction` are known" : $"is `{near}` meant?");
-
-    public static Diagnostic OnlyOtherBranch(string why, SourceSpan span) => Error("RC2001", why, span, "bind it in every branch, or use it inside its own");
+    public static Diagnostic OnlyOtherBranch(string why, SourceSpan span) => Error("RC2001", why, span, "use it within that branch, or bind it in every branch");
 
     public static Diagnostic WrongKind(string what, string found, string needed, SourceSpan span, string? hint = null) =>
         Error("RC2002", $"`{what}` is {found}, and {needed} is needed here", span, hint);
@@ -48,7 +45,7 @@ internal static class MakingFindings
         Error("RC2010", $"there is one crossing, and `{choice}` does not hold for it", span, candidate);
 
     public static Diagnostic OnePointTwice(string first, string second, SourceSpan span) =>
-        Error("RC2011", $"`{first}` and `{second}` are one point, so they settle no line", span, "a line needs two points apart");
+        Error("RC2011", $"`{first}` and `{second}` are one point, so they settle no line", span, "a line needs two points that are apart");
 
     public static Diagnostic NotPositive(string what, string value, SourceSpan span) =>
         Error("RC2012", $"{what} is {value}, and must be more than nothing", span, "look at the lengths it is worked out from");
@@ -74,10 +71,10 @@ internal static class MakingFindings
 
     public static Diagnostic BadNeed(string message, SourceSpan span, string? hint = null) => Error("RC2021", message, span, hint);
 
-    public static Diagnostic FollowsItself(string title, SourceSpan span) => Error("RC2022", $"recipe \"{title}\" follows itself", span, "no recipe may, nor through another");
+    public static Diagnostic FollowsItself(string title, SourceSpan span) => Error("RC2022", $"recipe \"{title}\" follows itself", span, "a recipe may not, nor through another: it would never end");
 
     public static Diagnostic Refused(string message, SourceSpan span, string? recipe) =>
-        Error("RC2023", message, span, recipe is null ? null : $"recipe \"{recipe}\" refuses this; change what it is given");
+        Error("RC2023", message, span, recipe is null ? "the script refuses its own figures; change them" : $"recipe \"{recipe}\" refuses this; change what it is given");
 
     public static Diagnostic ClaimRefuted(string says, string? by, SourceSpan span) => Error("RC2024", $"the claim `{says}` is refuted", span, by);
 
@@ -90,11 +87,6 @@ internal static class MakingFindings
     public static Diagnostic NotOn(string point, string curve, string distance, SourceSpan span) =>
         Error("RC2027", $"`{point}` does not lie on `{curve}`", span, distance);
 
-    public static Diagnostic HeadOutOfPlace(string message, SourceSpan span, string? hint = null) => Error("RC2028", message, span, hint);
-
-    public static Diagnostic UnknownSheet(string name, SourceSpan span) =>
-        Error("RC2029", $"no sheet is called `{name}`", span, "`A0` to `A6`, `letter`, `legal`, `tabloid`, or two sizes: `sheet 420 mm by 297 mm`");
-
     public static Diagnostic BadKit(string message, SourceSpan span, string? hint = null) => Error("RC2030", message, span, hint);
 
     public static Diagnostic BadHand(string message, SourceSpan span, string? hint = null) => Error("RC2031", message, span, hint);
@@ -105,7 +97,7 @@ internal static class MakingFindings
     public static Diagnostic BadGiven(string message, SourceSpan span, string? hint = null) => Error("RC2033", message, span, hint);
 
     public static Diagnostic CannotUse(string name, SourceSpan span) =>
-        Error("RC2034", $"the script \"{name}\" to be used cannot be read", span, "the name is looked up beside this script");
+        Error("RC2034", $"the script \"{name}\" to be used cannot be read", span, "the name is looked for beside this script; mend it, or put the file there");
 
     public static Diagnostic BadKeep(string message, SourceSpan span, string? hint = null) => Error("RC2035", message, span, hint);
 
@@ -116,7 +108,10 @@ internal static class MakingFindings
     public static Diagnostic Degenerate(string message, SourceSpan span, string? hint = null) => Error("RC2038", message, span, hint);
 
     public static Diagnostic NoTool(string want, string tools, SourceSpan span) =>
-        Error("RC2039", $"no tool in the kit can do this: {want}", span, $"add {tools} to the `kit`");
+        Error("RC2039", $"no tool in the kit can make {want}", span, $"add {tools} to the `kit`");
+
+    public static Diagnostic NotInKit(string tool, SourceSpan span) =>
+        Error("RC2039", $"`by {tool}` is asked, and the kit has none", span, $"add `{tool}` to the `kit`, or leave out `by {tool}`");
 
     public static Diagnostic ActsDoNotProve(string what, SourceSpan span) =>
         Error("RC2040", $"the acts for this sentence could not be proved to make {what}", span, "please tell the developers; no figure from it can be trusted");

@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using System.Globalization;
 using System.Numerics;
 
@@ -18,6 +19,10 @@ public sealed class Decider
     private readonly DeciderOptions options;
     private readonly CancellationToken cancellation;
     private readonly SeededBits random;
+    private readonly List<Real> apart = [];
+    private readonly List<Real> vanishing = [];
+    private bool hasSpecific;
+    private bool records;
 
     /// <summary>Decides within the limits of <paramref name="options"/>.</summary>
     public Decider(DeciderOptions options, CancellationToken cancellation = default)
@@ -33,7 +38,40 @@ public sealed class Decider
 
     /// <summary>The sign of <paramref name="x"/>, with how it is known; may be undecided for quantities without exact value.</summary>
     /// <exception cref="UndecidedException">The limits were reached.</exception>
-    public Decision Decide(Real x)
+    public Decision Decide(Real x) => Record(x, Reach(x));
+
+    /// <summary>Keeps what is decided meanwhile, so that <see cref="FindRanges"/> can tell how far it holds: for the decisions on which a figure depends.</summary>
+    public T Recording<T>(Func<T> decide)
+    {
+        bool before = records;
+        records = true;
+        try
+        {
+            return decide();
+        }
+        finally
+        {
+            records = before;
+        }
+    }
+
+    /// <summary>For each given that recorded decisions depend on: over which part of its range they all stay as they are.</summary>
+    public ImmutableArray<ValidFor> FindRanges() => ValidRange.Of(apart, vanishing, hasSpecific);
+
+    private Decision Record(Real x, Decision decision)
+    {
+        if (!records || x is RationalReal || !decision.Verdict.IsDecided)
+            return decision;
+        if (decision.Sign != 0)
+            apart.Add(x);
+        else
+            vanishing.Add(x);
+        // A zero at the very values of the givens, which is no theorem, holds nowhere else.
+        hasSpecific |= decision.Sign == 0 && decision.Verdict.Certainty is not (Certainty.ProvedForEvery or Certainty.CertainForEvery) && StraightLine.LeavesOf(x).Exists(ValidRange.IsNamed);
+        return decision;
+    }
+
+    private Decision Reach(Real x)
     {
         if (SignOfEnclosure(x) is { } quick)
             return new Decision(quick, Verdict.Proved);
@@ -87,7 +125,11 @@ public sealed class Decider
     public int Sign(Real x)
     {
         if (SignOfEnclosure(x) is { } quick)
+        {
+            if (records)
+                Record(x, new Decision(quick, Verdict.Proved));
             return quick;
+        }
 
         Decision decision = Decide(x);
         if (!decision.Verdict.IsDecided)

@@ -55,7 +55,7 @@ internal sealed partial class Constructions
     public PointMark StepRound(CircleMark circle, PointMark centre, PointMark from, Opening opening, bool anticlockwise, string? name)
     {
         if (!HasDividers)
-            throw NoTool("stepping round a circle", "`dividers`");
+            throw NoTool("steps round a circle", "`dividers`");
         CircleMark swung = bench.Swing(from, opening, null, opening is SpanOpening && ReferenceEquals(opening.Squared, circle.Circle.RadiusSquared) ? [centre] : []);
         Vector spoke = from.Point.From(centre.Point);
         int side = anticlockwise ? 1 : -1;

@@ -55,7 +55,7 @@ internal sealed partial class Constructions
         if (bench.Standing(wanted) is { } standing)
             return standing;
         if (!HasDividers || !Kit.HasStraightedge)
-            throw NoTool("halving", "`straightedge` and `dividers`");
+            throw NoTool("a line that halves", "`straightedge` and `dividers`");
         double apart = first.Point.DistanceTo(second.Point).ToDouble();
         FreeOpening opening = Free(apart * 0.75, (apart / 2) + 1);
         CircleMark a = bench.Swing(first, opening, null), b = bench.Swing(second, opening, null);
@@ -81,7 +81,7 @@ internal sealed partial class Constructions
         if (bench.Standing(wanted) is { } standing)
             return standing;
         if (!HasDividers || !Kit.HasStraightedge)
-            throw NoTool("halving an angle", "`straightedge` and `dividers`");
+            throw NoTool("the half of an angle", "`straightedge` and `dividers`");
         // One foot in the corner marks both sides at one distance; equal arcs about the marks cross on the half.
         SpanOpening reach = new(corner, first);
         DirectedLine side = Through(corner, second, null);

@@ -133,7 +133,7 @@ internal sealed partial class Constructions(Workbench bench, Sheet room)
     private void Need(ByTool? by, ByTool tool, bool has)
     {
         if (by == tool && !has)
-            throw new FaultException(MakingFindings.NoTool($"`by {tool.ToString().ToLowerInvariant()}` is asked", $"`{tool.ToString().ToLowerInvariant()}`", Serving));
+            throw new FaultException(MakingFindings.NotInKit(tool.ToString().ToLowerInvariant(), Serving));
     }
 
     private bool HasDividers => Kit.Dividers is not null || Kit.Beam is not null;

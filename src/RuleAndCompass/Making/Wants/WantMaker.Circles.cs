@@ -12,7 +12,7 @@ internal sealed partial class WantMaker
     {
         PointValue about = evaluator.Point(want.About), through = evaluator.Point(want.Through);
         if (IsSame(about, through))
-            throw new FaultException(MakingFindings.NotPositive("the circle's opening", "nothing", want.Span) with { Hint = $"`{want.About}` and `{want.Through}` are one point" });
+            throw new FaultException(MakingFindings.NotPositive("the circle's opening", "nothing", want.About.Span.To(want.Through.Span)) with { Hint = $"`{want.About}` and `{want.Through}` are one point; name another that the circle passes through" });
         Bind(want.Circle, bench.Swing(about.Mark, new SpanOpening(about.Mark, through.Mark), evaluator.NameOf(want.Circle)));
     }
 
@@ -27,7 +27,7 @@ internal sealed partial class WantMaker
         PointValue about = evaluator.Point(want.About);
         LineValue line = evaluator.Line(want.Touching);
         if (Incidence.Holds(about.Point, line.Directed.Mark.Line, Decider))
-            throw new FaultException(MakingFindings.NotPositive("the circle's opening", "nothing", want.Span) with { Hint = $"`{want.About}` lies on `{want.Touching}`" });
+            throw new FaultException(MakingFindings.NotPositive("the circle's opening", "nothing", want.About.Span.To(want.Touching.Span)) with { Hint = $"`{want.About}` lies on `{want.Touching}`; a circle about it crosses the line" });
         PointMark foot = constructions.Foot(about.Mark, Directed(line), null, want.By);
         Bind(want.Circle, bench.Swing(about.Mark, new SpanOpening(about.Mark, foot), evaluator.NameOf(want.Circle)));
     }
@@ -35,11 +35,11 @@ internal sealed partial class WantMaker
     private void Make(StrikeThroughThree want)
     {
         PointValue first = evaluator.Point(want.First), second = evaluator.Point(want.Second), third = evaluator.Point(want.Third);
-        Apart(first, want.First, second, want.Second, want);
-        Apart(second, want.Second, third, want.Third, want);
-        Apart(first, want.First, third, want.Third, want);
+        Apart(first, want.First, second, want.Second);
+        Apart(second, want.Second, third, want.Third);
+        Apart(first, want.First, third, want.Third);
         if (Decider.IsZero(Vector.Cross(second.Point.From(first.Point), third.Point.From(first.Point))))
-            throw new FaultException(MakingFindings.Degenerate($"`{want.First}`, `{want.Second}` and `{want.Third}` lie on one line, so no circle passes through all three", want.Span));
+            throw new FaultException(MakingFindings.Degenerate($"`{want.First}`, `{want.Second}` and `{want.Third}` lie on one line, so no circle passes through all three", want.First.Span.To(want.Third.Span), "a circle takes three points that bend"));
         DirectedLine a = constructions.Halving(first.Mark, second.Mark, null), b = constructions.Halving(second.Mark, third.Mark, null);
         PointMark centre = constructions.Crossed(a, b);
         // Equally far from all three (Euclid IV.5), so the arc through one passes through the others.
@@ -58,7 +58,7 @@ internal sealed partial class WantMaker
             case LengthSpan length:
                 QuantityValue size = evaluator.Length(length.Length);
                 if (Decider.Sign(size.Amount) <= 0)
-                    throw new FaultException(MakingFindings.NotPositive("the opening", $"{Decider.ToFixed(size.Amount, 3)} mm", span.Span));
+                    throw new FaultException(MakingFindings.NotPositive("the opening", evaluator.Written(size), span.Span));
                 return constructions.OpeningFor(size);
             default:
                 throw new System.Diagnostics.UnreachableException($"No opening of {span.GetType().Name}.");

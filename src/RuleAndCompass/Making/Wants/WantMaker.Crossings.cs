@@ -24,9 +24,9 @@ internal sealed partial class WantMaker
         (CurveMark first, LineValue? firstLine) = CurveIn(want.First);
         (CurveMark second, LineValue? secondLine) = CurveIn(want.Second);
         Crossing crossing = Crossing.Of(CurveOf(first), CurveOf(second), Decider);
-        MustMeet(first, second, crossing, want.First.ToString()!, want.Second.ToString()!, want.Span);
+        MustMeet(first, second, crossing, want.First.ToString()!, want.Second.ToString()!, MeetingIn(want));
         if (crossing.Points.Length < 2)
-            throw new FaultException(MakingFindings.Degenerate($"`{want.First}` and `{want.Second}` meet in one point only", want.Span, "prick one point"));
+            throw new FaultException(MakingFindings.Degenerate($"`{want.First}` and `{want.Second}` meet in one point only", MeetingIn(want), $"prick one point: `prick {want.Point} where {want.First} meets {want.Second}`"));
         bool against = (firstLine ?? secondLine)?.Directed.IsReversed == true;
         for (int place = 0; place < 2; place++)
         {
@@ -45,8 +45,8 @@ internal sealed partial class WantMaker
 
     private PointMark Pick(CurveMark first, CurveMark second, Crossing crossing, Choice? choice, string firstName, string secondName, WantSentence want, string? name, LineValue? met = null)
     {
-        MustMeet(first, second, crossing, firstName, secondName, want.Span);
-        SourceSpan at = choice?.Span ?? want.Span;
+        MustMeet(first, second, crossing, firstName, secondName, MeetingIn(want));
+        SourceSpan at = choice?.Span ?? MeetingIn(want);
         if (crossing.Points.Length == 1)
         {
             if (choice is not null && !Chosen(choice, crossing.Points[0], null, met))
@@ -56,17 +56,25 @@ internal sealed partial class WantMaker
 
         string candidates = $"they are at {Place(crossing.Points[0])} and {Place(crossing.Points[1])}";
         if (choice is null)
-            throw new FaultException(MakingFindings.NeedsChoice(firstName, secondName, candidates, want.Span));
-        bool one = Chosen(choice, crossing.Points[0], crossing.Points[1], met), other = Chosen(choice, crossing.Points[1], crossing.Points[0], met);
+            throw new FaultException(MakingFindings.NeedsChoice(firstName, secondName, candidates, at));
+        (bool one, bool other) = Decider.Recording(() =>
+            (Chosen(choice, crossing.Points[0], crossing.Points[1], met), Chosen(choice, crossing.Points[1], crossing.Points[0], met)));
         if (one == other)
             throw new FaultException(one ? MakingFindings.ChoicePicksBoth(choice.ToString()!, candidates, at) : MakingFindings.ChoicePicksNeither(choice.ToString()!, candidates, at));
         int which = one ? 0 : 1;
-        return bench.Cross(first, second, crossing.Points[which], which, name, Said(choice));
+        return bench.Cross(first, second, crossing.Points[which], which, name, Said(choice, met));
     }
 
     // The choice as it is said at the bench, with the names that stand on the stock.
-    private string Said(Choice choice)
+    private string Said(Choice choice, LineValue? met)
     {
+        // A line may run against the act that made it, which is what the bench sees.
+        bool against = choice.Kind switch
+        {
+            ChoiceKind.LeftAlong or ChoiceKind.RightAlong => evaluator.Line(choice.Of).Directed.IsReversed,
+            ChoiceKind.AheadOf or ChoiceKind.Behind => met?.Directed.IsReversed == true,
+            _ => false,
+        };
         string of = choice.Kind switch
         {
             ChoiceKind.LeftAlong or ChoiceKind.RightAlong or ChoiceKind.SameSide or ChoiceKind.Across => evaluator.Line(choice.Of).Directed.Mark.Name,
@@ -83,10 +91,8 @@ internal sealed partial class WantMaker
             ChoiceKind.Below => $", below {of}",
             ChoiceKind.LeftOf => $", left of {of}",
             ChoiceKind.RightOf => $", right of {of}",
-            ChoiceKind.LeftAlong => $", on the left as {of} runs",
-            ChoiceKind.RightAlong => $", on the right as {of} runs",
-            ChoiceKind.AheadOf => $", ahead of {of}",
-            ChoiceKind.Behind => $", behind {of}",
+            ChoiceKind.LeftAlong or ChoiceKind.RightAlong => $", on the {((choice.Kind == ChoiceKind.LeftAlong) != against ? "left" : "right")} as {of} runs",
+            ChoiceKind.AheadOf or ChoiceKind.Behind => $", {((choice.Kind == ChoiceKind.AheadOf) != against ? "ahead of" : "behind")} {of}",
             ChoiceKind.SameSide => $", on the same side of {of} as {from}",
             ChoiceKind.Across => $", across {of} from {from}",
             ChoiceKind.Inside => $", inside {of}",
@@ -94,6 +100,16 @@ internal sealed partial class WantMaker
             _ => throw new UnreachableException($"No words for {choice.Kind}."),
         };
     }
+
+    // `a meets b`, or what of the sentence says so.
+    private static SourceSpan MeetingIn(WantSentence want) => want switch
+    {
+        PrickWhere where => where.First.Span.To(where.Second.Span),
+        PrickBoth both => both.First.Span.To(both.Second.Span),
+        RuleTouchingFrom touching => touching.Circle.Span.To(touching.From.Span),
+        RuleTouchingBoth touching => touching.First.Span.To(touching.Second.Span),
+        _ => want.Span,
+    };
 
     private void MustMeet(CurveMark first, CurveMark second, Crossing crossing, string firstName, string secondName, SourceSpan span)
     {

@@ -11,7 +11,7 @@ internal sealed partial class WantMaker
     private void Make(RuleThrough want)
     {
         PointValue first = evaluator.Point(want.First), second = evaluator.Point(want.Second);
-        Apart(first, want.First, second, want.Second, want);
+        Apart(first, want.First, second, want.Second);
         Bind(want.Line, constructions.Through(first.Mark, second.Mark, evaluator.NameOf(want.Line)), first.Point);
     }
 
@@ -21,7 +21,7 @@ internal sealed partial class WantMaker
         string name = evaluator.NameOf(want.Line);
         if (want.Toward is TowardDirection toward && evaluator.Evaluate(toward.Value) is PointValue aim)
         {
-            Apart(through, want.Through, aim, (Reference)toward.Value, want.Toward); // only a reference gives a point
+            Apart(through, want.Through, aim, (Reference)toward.Value); // only a reference gives a point
             Bind(want.Line, constructions.Through(through.Mark, aim.Mark, name), through.Point);
             return;
         }
@@ -57,7 +57,7 @@ internal sealed partial class WantMaker
     private void Make(RuleHalving want)
     {
         PointValue from = evaluator.Point(want.From), to = evaluator.Point(want.To);
-        Apart(from, want.From, to, want.To, want);
+        Apart(from, want.From, to, want.To);
         DirectedLine line = constructions.Halving(from.Mark, to.Mark, evaluator.NameOf(want.Line));
         Bind(want.Line, line, new Point((from.Point.X + to.Point.X) / 2, (from.Point.Y + to.Point.Y) / 2, [line.Mark.Line]));
     }
@@ -65,8 +65,8 @@ internal sealed partial class WantMaker
     private void Make(RuleHalvingAngle want)
     {
         PointValue first = evaluator.Point(want.First), corner = evaluator.Point(want.Corner), second = evaluator.Point(want.Second);
-        Apart(first, want.First, corner, want.Corner, want);
-        Apart(second, want.Second, corner, want.Corner, want);
+        Apart(first, want.First, corner, want.Corner);
+        Apart(corner, want.Corner, second, want.Second);
         Vector a = first.Point.From(corner.Point), b = second.Point.From(corner.Point);
         if (ReferenceEquals(first.Mark, second.Mark) || Decider.IsZero(Vector.Cross(a, b)))
         {
@@ -83,7 +83,7 @@ internal sealed partial class WantMaker
     {
         CircleValue circle = evaluator.Circle(want.Circle);
         PointValue at = evaluator.Point(want.At);
-        On(at, want.At, circle.Mark.Circle, want.Circle, want);
+        On(at, want.At, circle.Mark.Circle, want.Circle);
         DirectedLine spoke = constructions.Through(CentreOf(circle), at.Mark, null);
         Bind(want.Line, constructions.Square(spoke, at.Mark, evaluator.NameOf(want.Line), want.By), at.Point);
     }
@@ -94,9 +94,9 @@ internal sealed partial class WantMaker
         PointValue from = evaluator.Point(want.From);
         int side = Decider.Sign(circle.Mark.Circle.PowerOf(from.Point));
         if (side < 0)
-            throw new FaultException(MakingFindings.Degenerate($"`{want.From}` lies inside `{want.Circle}`, so no line through it touches the circle", want.Span));
+            throw new FaultException(MakingFindings.Degenerate($"`{want.From}` lies inside `{want.Circle}`, so no line through it touches the circle", MeetingIn(want), "name a point outside the circle"));
         if (side == 0)
-            throw new FaultException(MakingFindings.Degenerate($"`{want.From}` lies on `{want.Circle}`", want.Span, $"write `rule {want.Line} touching {want.Circle} at {want.From}`"));
+            throw new FaultException(MakingFindings.Degenerate($"`{want.From}` lies on `{want.Circle}`, where the line would touch", MeetingIn(want), $"write `rule {want.Line} touching {want.Circle} at {want.From}`"));
         // The half circle on the way to the centre meets the circle where the square angles stand (Euclid III.31).
         PointMark middle = constructions.Midway(CentreOf(circle), from.Mark, null);
         CircleMark half = bench.Swing(middle, new SpanOpening(middle, from.Mark), null, CentreOf(circle));

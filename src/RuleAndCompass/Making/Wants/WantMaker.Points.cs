@@ -43,7 +43,7 @@ internal sealed partial class WantMaker
     {
         LineValue line = evaluator.Line(want.Line);
         PointValue from = evaluator.Point(want.From);
-        On(from, want.From, line.Directed.Mark.Line, want.Line, want);
+        On(from, want.From, line.Directed.Mark.Line, want.Line);
         AlongLine(want.Point, line, from, want.Length, IsAhead(line, want.Toward, from, want.From));
     }
 
@@ -51,7 +51,7 @@ internal sealed partial class WantMaker
     {
         LineValue line = evaluator.Line(want.Line);
         PointValue from = evaluator.Point(want.Of);
-        On(from, want.Of, line.Directed.Mark.Line, want.Line, want);
+        On(from, want.Of, line.Directed.Mark.Line, want.Line);
         AlongLine(want.Point, line, from, want.Length, want.Ahead);
     }
 
@@ -82,7 +82,7 @@ internal sealed partial class WantMaker
     {
         CircleValue circle = evaluator.Circle(want.Circle);
         PointValue from = evaluator.Point(want.From);
-        On(from, want.From, circle.Mark.Circle, want.Circle, want);
+        On(from, want.From, circle.Mark.Circle, want.Circle);
         Angle by = Signed(evaluator.AngleOf(want.Angle), want.Way);
         Bind(want.Point, constructions.TurnedOn(circle.Mark, CentreOf(circle), from.Mark, by, evaluator.NameOf(want.Point), want.By));
     }
@@ -90,7 +90,7 @@ internal sealed partial class WantMaker
     private void Make(PrickDividing want)
     {
         PointValue from = evaluator.Point(want.From), to = evaluator.Point(want.To);
-        Apart(from, want.From, to, want.To, want);
+        Apart(from, want.From, to, want.To);
         List<IndexKey> keys = Keys(want.Points, 2);
         IReadOnlyList<PointMark> marks = constructions.Dividing(from.Mark, to.Mark, keys.Count - 1, place => MemberName(want.Points, keys[place]));
         BindMany(want.Points, keys, marks);
@@ -99,7 +99,7 @@ internal sealed partial class WantMaker
     private void Make(PrickRound want)
     {
         PointValue centre = evaluator.Point(want.Centre), from = evaluator.Point(want.From);
-        Apart(centre, want.Centre, from, want.From, want);
+        Apart(centre, want.Centre, from, want.From);
         List<IndexKey> keys = Keys(want.Points, 3);
         IReadOnlyList<PointMark> marks = constructions.Round(centre.Mark, from.Mark, keys.Count, want.Way == Way.Anticlockwise, place => MemberName(want.Points, keys[place]), want.By);
         BindMany(want.Points, keys, marks);
@@ -109,7 +109,7 @@ internal sealed partial class WantMaker
     {
         LineValue line = evaluator.Line(want.Line);
         PointValue from = evaluator.Point(want.From);
-        On(from, want.From, line.Directed.Mark.Line, want.Line, want);
+        On(from, want.From, line.Directed.Mark.Line, want.Line);
         bool ahead = IsAhead(line, want.Toward, from, want.From);
         Opening opening = OpeningOf(want.Opening);
         List<IndexKey> keys = Keys(want.Points, 1);
@@ -123,7 +123,7 @@ internal sealed partial class WantMaker
     {
         CircleValue circle = evaluator.Circle(want.Circle);
         PointValue from = evaluator.Point(want.From);
-        On(from, want.From, circle.Mark.Circle, want.Circle, want);
+        On(from, want.From, circle.Mark.Circle, want.Circle);
         Opening opening = OpeningOf(want.Opening);
         if (Decider.Sign(opening.Squared - (4 * circle.Mark.Circle.RadiusSquared)) >= 0)
             throw new FaultException(MakingFindings.Degenerate($"the opening is no shorter than the way across `{want.Circle}`, so it cannot be stepped round it", want.Opening.Span));

@@ -144,16 +144,16 @@ internal sealed partial class WantMaker(Evaluator evaluator, Workbench bench, Co
 
     private bool IsSame(PointValue a, PointValue b) => bench.Marks.IsSame(a.Point, b.Point);
 
-    private void Apart(PointValue a, Reference nameA, PointValue b, Reference nameB, Node at)
+    private void Apart(PointValue a, Reference nameA, PointValue b, Reference nameB)
     {
         if (IsSame(a, b))
-            throw new FaultException(MakingFindings.OnePointTwice(nameA.ToString()!, nameB.ToString()!, at.Span));
+            throw new FaultException(MakingFindings.OnePointTwice(nameA.ToString()!, nameB.ToString()!, nameA.Span.To(nameB.Span)));
     }
 
-    private void On(PointValue point, Reference pointName, Curve curve, Reference curveName, Node at)
+    private void On(PointValue point, Reference pointName, Curve curve, Reference curveName)
     {
         if (!Incidence.Holds(point.Point, curve, Decider))
-            throw new FaultException(MakingFindings.NotOn(pointName.ToString()!, curveName.ToString()!, Incidence.Distance(point.Point, curve), at.Span));
+            throw new FaultException(MakingFindings.NotOn(pointName.ToString()!, curveName.ToString()!, Incidence.Distance(point.Point, curve), pointName.Span));
     }
 
     /// <summary>A direction as an angle from right; a point by the way to it.</summary>
