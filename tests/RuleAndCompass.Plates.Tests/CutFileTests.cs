@@ -125,6 +125,12 @@ public sealed partial class CutFileTests
     }
 
     [Fact]
+    public void The_file_is_the_approved_one()
+    {
+        Approved.ShouldMatch("one-of-each-cut.svg", System.Text.Encoding.UTF8.GetString(CutFile.Write(ByHand.OneOfEach(), "each.setout")));
+    }
+
+    [Fact]
     public void Nothing_kept_leaves_no_group()
     {
         Parse(Layouts.Of(Layouts.OnePoint)).Elements(svg + "g").ShouldBeEmpty();

@@ -162,6 +162,28 @@ public sealed class FullSizePlateTests
     }
 
     [Fact]
+    public void The_scene_is_the_approved_one()
+    {
+        Approved.ShouldMatch("one-of-each-full.txt", SceneText.Of(FullSizePlate.Compose(ByHand.OneOfEach(), new() { ScriptName = "each.setout" })[0]));
+    }
+
+    [Fact]
+    public void Lettering_bent_round_a_circle_stands_with_its_middle_on_it()
+    {
+        // About D, at (100, 120) on the page, with radius 20; capitals 3.5 high. Feet to the centre above, head to the centre below.
+        List<Words> letters = [.. FullSizePlate.Compose(ByHand.OneOfEach())[0].Items.OfType<Words>().Where(words => words.Role == Role.Lettering && words.Text.Length == 1)];
+
+        letters.Select(letter => letter.Text).ShouldBe(["R", "O", "U", "N", "D", "U", "N", "D", "E", "R"]);
+        letters[..5].ShouldAllBe(letter => Math.Abs(letter.At.DistanceTo(new Spot(100, 120)) - 18.25) < 1e-9);
+        letters[5..].ShouldAllBe(letter => Math.Abs(letter.At.DistanceTo(new Spot(100, 120)) - 21.75) < 1e-9);
+        letters[..5].Select(letter => letter.At.X).ShouldBeInOrder();
+        letters[5..].Select(letter => letter.At.X).ShouldBeInOrder();
+        letters[2].TurnDegrees.ShouldBe(0, 10);
+        letters[0].TurnDegrees.ShouldBeGreaterThan(0);
+        letters[4].TurnDegrees.ShouldBeLessThan(0);
+    }
+
+    [Fact]
     public void The_same_layout_gives_the_same_bytes()
     {
         Layout layout = Layouts.Of(Layouts.Dial);

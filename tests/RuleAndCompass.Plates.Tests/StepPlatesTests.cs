@@ -219,7 +219,7 @@ public sealed class StepPlatesTests
     [Fact]
     public void The_scene_is_the_approved_one()
     {
-        Approved.ShouldMatch("gate-steps.txt", string.Join("\n", StepPlates.Compose(Layouts.Of(Layouts.Gate)).Select(SceneText.Of)));
+        Approved.ShouldMatch("one-of-each-steps.txt", string.Join("\n", StepPlates.Compose(ByHand.OneOfEach(), new() { ScriptName = "each.setout" }).Select(SceneText.Of)));
     }
 
     // The lines of the column, put together again to sentences.

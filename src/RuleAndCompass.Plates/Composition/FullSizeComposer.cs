@@ -89,7 +89,7 @@ internal sealed class FullSizeComposer
             foreach (Words words in KeptShape.Letters(lettering, view))
             {
                 canvas.Add(words);
-                placement.Block(BoxOf(words), always);
+                placement.Block(KeptShape.BoxOf(words), always);
             }
         }
 
@@ -369,25 +369,5 @@ internal sealed class FullSizeComposer
         }
 
         return null;
-    }
-
-    private static Box BoxOf(Words words)
-    {
-        double width = Typesetting.Width(words.Text, words.Typeface, words.SizeMillimetres);
-        double height = words.SizeMillimetres * Face.CapitalHeight;
-        double left = words.Anchor switch
-        {
-            Anchor.Left => 0,
-            Anchor.Right => -width,
-            _ => -width / 2,
-        };
-        (double sine, double cosine) = Math.SinCos(words.TurnDegrees * Math.PI / 180);
-        Box box = new(words.At.X, words.At.Y, words.At.X, words.At.Y);
-        foreach ((double x, double y) in new[] { (left, 0.0), (left + width, 0.0), (left, height), (left + width, height) })
-        {
-            box = box.With(words.At.Moved((x * cosine) - (y * sine), -((x * sine) + (y * cosine))));
-        }
-
-        return box;
     }
 }

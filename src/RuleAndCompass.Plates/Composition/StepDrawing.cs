@@ -78,10 +78,11 @@ internal sealed class StepDrawing
         Strokes(canvas, plan, last, present: true);
         KeptWork(canvas, plan, last);
         List<(Act Act, string Text, PlacedLabel Label)> numbers = [.. PlaceNumbers(plan)];
+        List<(string Text, PlacedLabel Label)> angles = [.. PlaceAngles(plan)];
         List<Mark> named = [.. MarksOn(plan).Where(names.ContainsKey)];
 
         // A label that found no free place gets a little bare paper round it; all of that lies under the signs.
-        foreach (PlacedLabel label in numbers.Select(number => number.Label).Concat(named.Select(mark => names[mark].Label)))
+        foreach (PlacedLabel label in numbers.Select(number => number.Label).Concat(angles.Select(angle => angle.Label)).Concat(named.Select(mark => names[mark].Label)))
         {
             if (label.IsCrowded)
             {
@@ -99,6 +100,11 @@ internal sealed class StepDrawing
         {
             Leader(canvas, Role.Now, act.Makes is PointMark, label, Pens.NowThin);
             canvas.Label(Role.Now, text, label.Box, Typeface.Strong, PlateFormat.NumberSize, Ink.Accent);
+        }
+
+        foreach ((string text, PlacedLabel label) in angles)
+        {
+            canvas.Label(Role.Now, text, label.Box, Typeface.Text, PlateFormat.NumberSize, Ink.Accent);
         }
 
         foreach (Mark mark in named)
@@ -182,10 +188,15 @@ internal sealed class StepDrawing
             keptWork.AddRange(KeptShape.Outlines(kept, view).Select(outline => (from, (Item)new Stroke(Role.Kept, outline, pen))));
         }
 
+        // The piece is lettered when all the rest is done.
+        PlateSet lastPlate = PlateSet.Only(plans.Count - 1);
         foreach (Lettering lettering in layout.Letterings)
         {
-            int from = actOfPoint.GetValueOrDefault(lettering.At, int.MaxValue);
-            keptWork.AddRange(KeptShape.Letters(lettering, view).Select(words => (from, (Item)words)));
+            foreach (Words words in KeptShape.Letters(lettering, view))
+            {
+                keptWork.Add((int.MaxValue, words));
+                placement.Block(KeptShape.BoxOf(words), lastPlate);
+            }
         }
     }
 
@@ -338,6 +349,20 @@ internal sealed class StepDrawing
         }
     }
 
+    // The angle itself beside the protractor's arc.
+    private IEnumerable<(string Text, PlacedLabel Label)> PlaceAngles(PlatePlan plan)
+    {
+        for (int i = plan.First; i < plan.End; i++)
+        {
+            if (layout.Acts[i] is Protract protract && view.Window.Holds(SpotOf(protract.At)))
+            {
+                string text = Math.Abs(protract.By.ToDegreesDouble()).ToString("0.##", CultureInfo.InvariantCulture) + "°";
+                (double width, double height) = Canvas.LabelSize(text, Typeface.Text, PlateFormat.NumberSize);
+                yield return (text, placement.Place(AroundAngle(protract, width, height), PlateSet.Only(plan.Index)));
+            }
+        }
+    }
+
     private PlacedLabel? PlaceNumber(PlatePlan plan, Act act, string text)
     {
         (double width, double height) = Canvas.LabelSize(text, Typeface.Strong, PlateFormat.NumberSize);
@@ -389,7 +414,7 @@ internal sealed class StepDrawing
     {
         (double start, double sweep) = AngleOf(protract);
         Spot at = SpotOf(protract.At);
-        foreach (double radius in new[] { ProtractorRadius + 2.2, ProtractorRadius - 2.6, ProtractorRadius + 4.4 })
+        foreach (double radius in new[] { ProtractorRadius + 2.6, ProtractorRadius - 3, ProtractorRadius + 5.2, ProtractorRadius + 8 })
         {
             foreach (double part in new[] { 0.5, 0.3, 0.7, 1.2, -0.2 })
             {

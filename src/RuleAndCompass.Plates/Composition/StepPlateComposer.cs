@@ -21,6 +21,7 @@ internal sealed class StepPlateComposer
     private const double OverEdge = 3;
     private const int MostMoved = 5;
     private const double NumberGap = 2.2;
+    private const double PastInThumbnail = 0.8;
     private const double RoomRoundUsed = 0.06;
 
     private readonly Layout layout;
@@ -428,7 +429,7 @@ internal sealed class StepPlateComposer
                         canvas.Fill(Role.Thumbnail, Outline.Circle(small.OnPage(point.At), 0.22), Ink.Black);
                     }
 
-                    foreach (Outline outline in small.Strokes(trace, 0))
+                    foreach (Outline outline in small.Strokes(trace, PastInThumbnail))
                     {
                         canvas.Draw(Role.Thumbnail, outline, Pens.Thin);
                     }
