@@ -94,9 +94,7 @@ public sealed partial class Maker
     private Outcome<Layout> CarryOut()
     {
         evaluator.Scope = new(null, "");
-        UnboundValue unread = new();
-        foreach (string name in script.UnreadNames)
-            evaluator.Scope.Leave(new Bound(new Name(name, default), [], default), null, unread);
+        LeaveUnread(evaluator.Scope);
         bool finished = false;
         try
         {
@@ -387,11 +385,12 @@ public sealed partial class Maker
     {
         string title = evaluator.Text(follow.Recipe);
         if (recipes.Find(title) is not { } recipe)
-            throw new FaultException(recipes.IsIncomplete || script.UnreadNames.Contains(title) ? null : MakingFindings.UnknownRecipe(title, NearName.Find(title, recipes.Titles), follow.Recipe.Span));
+            throw new FaultException(recipes.IsIncomplete || recipes.UnreadNames.Contains(title) ? null : MakingFindings.UnknownRecipe(title, NearName.Find(title, recipes.Titles), follow.Recipe.Span));
         if (following.Contains(recipe.Title))
             throw new FaultException(MakingFindings.FollowsItself(recipe.Title, follow.Recipe.Span));
         Scope caller = evaluator.Scope;
         Scope inner = new(null, evaluator.NameOf(follow.Alias) + ".");
+        LeaveUnread(inner);
         BindNeeds(follow, recipe, inner);
         (SourceSpan Span, string Recipe)? followedBefore = followed;
         int stageBefore = stages.Current, parentBefore = stages.Parent, findingsBefore = findings.Count;
@@ -428,6 +427,8 @@ public sealed partial class Maker
         {
             if (recipe.Needs.All(need => need.Name.Text != argument.Need.Text))
             {
+                if (recipes.UnreadNames.Contains(argument.Need.Text))
+                    throw new FaultException(null);
                 string? near = NearName.Find(argument.Need.Text, recipe.Needs.Select(need => need.Name.Text));
                 throw new FaultException(MakingFindings.BadNeed($"recipe \"{recipe.Title}\" has no need called `{argument.Need.Text}`", argument.Need.Span,
                     near is null ? $"it needs {recipe.NeedsInWords}" : $"is `{near}` meant?"));
@@ -525,6 +526,14 @@ public sealed partial class Maker
         FamilyValue => MakingFindings.BoundTwice($"{name}[{index}]", span),
         _ => MakingFindings.BoundTwice(name, span),
     };
+
+    // What a sentence that could not be read would have bound is told of already.
+    private void LeaveUnread(Scope scope)
+    {
+        UnboundValue unread = new();
+        foreach (string name in recipes.UnreadNames)
+            scope.Leave(new Bound(new Name(name, default), [], default), null, unread);
+    }
 
     private void Leave(Sentence sentence)
     {

@@ -80,11 +80,15 @@ internal sealed class RecipeShelf
     /// <summary>True where a script to be used could not be read, so that a recipe may be missing for that reason.</summary>
     public bool IsIncomplete { get; private set; }
 
+    /// <summary>What sentences that could not be read would have bound, here and in the scripts used.</summary>
+    public HashSet<string> UnreadNames { get; } = new(StringComparer.Ordinal);
+
     public IEnumerable<string> Titles => recipes.Keys.Concat(RecipeBook.Names.Select(name => name.Replace('-', ' ')));
 
     public static RecipeShelf For(Script script, MakingOptions options, List<Diagnostic> findings, CancellationToken cancellation)
     {
         RecipeShelf shelf = new();
+        shelf.UnreadNames.UnionWith(script.UnreadNames);
         foreach (RecipeBlock block in script.Sentences.OfType<RecipeBlock>())
         {
             Recipe recipe = Recipe.Of(block);
@@ -123,6 +127,7 @@ internal sealed class RecipeShelf
         Outcome<Script> read = ScriptReader.Read(name, text, cancellation: cancellation);
         findings.AddRange(read.Diagnostics.Select(finding => finding with { File = name }));
         IsIncomplete |= read.HasErrors;
+        UnreadNames.UnionWith(read.Value?.UnreadNames ?? []);
         foreach (RecipeBlock block in read.Value?.Sentences.OfType<RecipeBlock>() ?? [])
             recipes.TryAdd(Recipe.Plain(block.Title), Recipe.Of(block));
     }

@@ -7,7 +7,7 @@ namespace RuleAndCompass.Tests.Making;
 
 public sealed class MakingFindingsTests
 {
-    // RC2032 is met at limits (MakingLimitTests), RC2016 and RC2025 at decisions that are too hard (UndecidedTests), RC2040 by no script: it says that a construction of ours is wrong.
+    // RC2032 is met at limits, RC2016 and RC2025 at decisions that are too hard (both in LimitTests), RC2040 by no script: it says that a construction of ours is wrong.
     private static readonly string[] Elsewhere = ["RC2016", "RC2025", "RC2032", "RC2040"];
 
     public static TheoryData<string> Pairs => [.. MakingFiles.Pairs];

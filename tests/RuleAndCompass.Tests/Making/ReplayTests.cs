@@ -6,7 +6,7 @@ namespace RuleAndCompass.Tests.Making;
 /// <summary>Another arithmetic follows the acts and lands on the same points.</summary>
 public sealed class ReplayTests
 {
-    // Doubles hold a sheet to about 1e-13 mm; weak crossings lose some of it.
+    // Decimals hold a sheet to about 1e-25 mm; weak crossings lose some of it.
     private const double NearMillimetres = 1e-9;
 
     public static TheoryData<string> Scripts => [.. MakingFiles.Scripts];
@@ -54,7 +54,7 @@ public sealed class ReplayTests
             given latitude = {latitude}
             prick O at (0, 0)
             rule noon through O toward 70°
-            follow "{recipe}" as dial with centre = O, noon = noon, latitude = latitude, radius = 60 mm, first = -7, last = 7, step = 1/2
+            follow "{recipe}" as dial with centre = O, noon = noon, latitude = latitude, radius = 60 mm, first = -7, last = 7
             """);
 
         (double off, string name) = Replay.Worst(layout);
