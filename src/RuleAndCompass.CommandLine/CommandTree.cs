@@ -101,7 +101,7 @@ internal static class CommandTree
                 return $"`{twice.Option.Name}` is given more than once";
         }
 
-        string plain = message.TrimEnd('.').Replace('\'', '`');
+        string plain = message.ReplaceLineEndings(" ").Replace("\t", "", StringComparison.Ordinal).Trim().TrimEnd('.').Replace('\'', '`');
         return plain.Length > 1 ? char.ToLower(plain[0], CultureInfo.InvariantCulture) + plain[1..] : plain;
     }
 }

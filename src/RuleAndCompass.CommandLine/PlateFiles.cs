@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using System.Diagnostics;
+using RuleAndCompass.Language.Diagnostics;
 using RuleAndCompass.Making;
 using RuleAndCompass.Plates;
 using RuleAndCompass.Plates.Scene;
@@ -17,12 +18,13 @@ internal static class PlateFiles
     public static ImmutableArray<string> EndingsOf(string kind) => kind == "cut" ? ["svg"] : ["pdf"];
 
     /// <summary>One kind of plates, in the first of its formats.</summary>
-    public static byte[] Write(Layout layout, string kind, CancellationToken cancellation)
+    /// <param name="findings">Those of the bench stand beside the acts they are about.</param>
+    public static byte[] Write(Layout layout, string kind, IEnumerable<Diagnostic> findings, CancellationToken cancellation)
     {
         string script = layout.Script.Name;
         return kind switch
         {
-            "steps" => Pdf(StepPlates.Compose(layout, new() { ScriptName = script }, cancellation: cancellation), layout, "step plates", cancellation),
+            "steps" => Pdf(StepPlates.Compose(layout, new() { ScriptName = script, Cautions = PlateCautions.Of(findings) }, cancellation: cancellation), layout, "step plates", cancellation),
             "full" => Pdf(FullSizePlate.Compose(layout, new() { ScriptName = script }, cancellation), layout, "full size", cancellation),
             "cut" => CutFile.Write(layout, script, cancellation),
             _ => throw new UnreachableException($"No plates called {kind}."),

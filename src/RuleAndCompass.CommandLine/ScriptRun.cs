@@ -20,7 +20,7 @@ internal sealed record ScriptRun(ScriptFile Script, Layout? Layout, ImmutableArr
     /// <exception cref="StopException">It can't be read, or an option can't.</exception>
     public static ScriptRun Of(string path, ParseResult parsed, Surroundings surroundings)
     {
-        ScriptFile script = ScriptFile.Read(path, surroundings.Terminal);
+        ScriptFile script = ScriptFile.Read(path, surroundings);
         MakingOptions options = surroundings.Options.MakingOf(parsed, script);
         using ProgressLine progress = new(surroundings.Terminal, $"making {script.Name}", parsed.GetValue(surroundings.Options.Quiet));
         Outcome<Layout> made = Maker.Make(script.Name, script.Text, options, progress, surroundings.Cancellation);

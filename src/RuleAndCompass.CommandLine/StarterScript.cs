@@ -34,6 +34,8 @@ internal sealed class StarterScript
 
         // Points first: lines and circles need one to pass through.
         NeedClause[] figures = [.. recipe.Needs.Except(measures).OrderBy(need => need.Kind.Text.StartsWith("point", StringComparison.Ordinal) ? 0 : 1)];
+        if (recipe.Needs.Any(IsFamily))
+            text.Append("# Where a whole family is needed, put the one that your script makes in place of these three.\n");
         foreach (NeedClause need in figures)
             Draw(need);
         if (figures.Length > 0)
@@ -41,10 +43,13 @@ internal sealed class StarterScript
 
         text.Append(CultureInfo.InvariantCulture, $"follow \"{recipe.Title}\" as {Alias()}");
         if (arguments.Count > 0)
-            text.Append(" with\n  ").AppendJoin(",\n  ", arguments);
+            text.Append("\n  with ").AppendJoin(",\n  ", arguments);
         text.Append('\n');
+        text.Append(CultureInfo.InvariantCulture, $"# It gives {string.Join(", ", recipe.Gives.Select(give => $"{Alias()}.{give.Name.Text}"))}: keep what the finished piece shows.\n");
         return text.ToString();
     }
+
+    private static bool IsFamily(NeedClause need) => need.Kind.Text is not "text" && need.Kind.Text.EndsWith('s');
 
     // What stands for a quantity of this kind where the recipe names none; null for figures.
     private static string? Written(string kind) => kind switch

@@ -1,10 +1,12 @@
+using RuleAndCompass.Benchmarks.Accuracy;
 using RuleAndCompass.Benchmarks.Exact;
 
 if (args.Length > 0 && args[0] == "exact")
     return ExactBenchmark.Run(args.AsSpan(1));
-
 if (args.Length > 0 && args[0] == "fuzz-numbers")
     return NumberFuzz.Run(args.AsSpan(1));
+if (args.Length > 0 && args[0] == "hand")
+    return HandErrorBenchmark.Run(args.AsSpan(1));
 
-Console.Error.WriteLine("usage: exact WORKLOAD [SIZE] | fuzz-numbers [COUNT [SEED]]");
+Console.Error.WriteLine("usage: exact WORKLOAD [SIZE] | fuzz-numbers [COUNT [SEED]] | hand trials SCRIPT [COUNT] | hand first-order [ACTS]");
 return 2;

@@ -72,16 +72,19 @@ public sealed class JsonTests
     public void Numbers_are_decimal_strings_with_their_exact_forms_beside_them()
     {
         using Workshop workshop = new();
-        string script = workshop.Script("root.setout", "prick A at (0, 0)\nprick B at (10 mm, 10 mm)\ncompare distance A to B with 15 mm as \"diagonal\"\ncompare A with (1 mm, 0) as \"corner\"\n");
+        string script = workshop.Script("root.setout", "prick A at (0, 0)\nprick B at (10 mm, 10 mm * sqrt(2))\ncompare distance A to B with 15 mm as \"diagonal\"\ncompare A with (1 mm, 0) as \"corner\"\n");
 
         JsonElement result = Fits(Workshop.Run("report", script, "--json").Output);
 
         JsonElement diagonal = result.GetProperty("comparisons")[0], corner = result.GetProperty("comparisons")[1];
-        diagonal.GetProperty("constructed").GetString().ShouldBe("14.142135623730950"); // 10√2: OEIS A002193
-        diagonal.GetProperty("exact").GetProperty("constructed").GetString().ShouldBe("10√2");
+        diagonal.GetProperty("constructed").GetString().ShouldBe("17.320508075688773"); // 10√3: OEIS A002194, ...8772935, rounded
+        diagonal.GetProperty("exact").GetProperty("constructed").GetString().ShouldBe("10√3");
         diagonal.GetProperty("computed").GetString().ShouldBe("15");
-        diagonal.GetProperty("difference").GetString().ShouldStartWith("-0.8578643762690495");
+        diagonal.GetProperty("difference").GetString().ShouldStartWith("2.3205080756887729");
         diagonal.GetProperty("verdict").GetString().ShouldBe("proved");
+        // 10√2: OEIS A002193; its seventeenth digit is a nought, which is as certain as the others.
+        Fits(Workshop.Run("report", workshop.Script("two.setout", "prick A at (0, 0)\nprick B at (10 mm, 10 mm)\ncompare distance A to B with 0\n"), "--json").Output)
+            .GetProperty("comparisons")[0].GetProperty("constructed").GetString().ShouldBe("14.142135623730950");
         corner.GetProperty("computed").GetProperty("x").GetString().ShouldBe("1");
         corner.GetProperty("difference").GetString().ShouldBe("1");
     }

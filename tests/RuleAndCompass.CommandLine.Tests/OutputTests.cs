@@ -1,4 +1,3 @@
-using System.Text;
 using RuleAndCompass.CommandLine.Files;
 using UglyToad.PdfPig;
 

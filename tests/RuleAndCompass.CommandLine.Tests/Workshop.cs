@@ -66,14 +66,14 @@ internal sealed class Workshop : IDisposable
     /// <summary>Runs the built program as a process, its working folder this one.</summary>
     public Ran RunProcess(params string[] args)
     {
-        using Process process = Start(args);
+        using Process process = Start(closesInput: true, args);
         Task<string> error = process.StandardError.ReadToEndAsync();
         string output = process.StandardOutput.ReadToEnd();
         process.WaitForExit(TimeSpan.FromMinutes(2)).ShouldBeTrue();
         return new(process.ExitCode, output, error.Result);
     }
 
-    public Process Start(params string[] args)
+    public Process Start(bool closesInput, params string[] args)
     {
         ProcessStartInfo start = new(Path.Combine(AppContext.BaseDirectory, OperatingSystem.IsWindows() ? "setout.exe" : "setout"))
         {
@@ -87,7 +87,8 @@ internal sealed class Workshop : IDisposable
         foreach (string arg in args)
             start.ArgumentList.Add(arg);
         Process process = Process.Start(start) ?? throw new InvalidOperationException("The program did not start.");
-        process.StandardInput.Close();
+        if (closesInput)
+            process.StandardInput.Close();
         return process;
     }
 

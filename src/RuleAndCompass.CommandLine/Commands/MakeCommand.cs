@@ -59,9 +59,9 @@ internal static class MakeCommand
 
     private static IEnumerable<Output> OutputsOf(string stem) =>
     [
-        new($"{stem}-steps.pdf", (product, cancellation) => PlateFiles.Write(product.Run.Layout!, "steps", cancellation)), // There is a layout where anything is written.
-        new($"{stem}-full.pdf", (product, cancellation) => PlateFiles.Write(product.Run.Layout!, "full", cancellation)),
-        new($"{stem}-cut.svg", (product, cancellation) => PlateFiles.Write(product.Run.Layout!, "cut", cancellation)),
+        new($"{stem}-steps.pdf", (product, cancellation) => PlateFiles.Write(product.Run.Layout!, "steps", product.Run.Findings, cancellation)), // There is a layout where anything is written.
+        new($"{stem}-full.pdf", (product, cancellation) => PlateFiles.Write(product.Run.Layout!, "full", product.Run.Findings, cancellation)),
+        new($"{stem}-cut.svg", (product, cancellation) => PlateFiles.Write(product.Run.Layout!, "cut", product.Run.Findings, cancellation)),
         new($"{stem}-report.txt", (product, _) => Utf8(product.ReportText())),
         new($"{stem}-report.json", (product, _) => Utf8(product.ReportJson())),
     ];

@@ -33,7 +33,7 @@ internal static class PlatesCommand
             return run.Status;
         OutputFiles.Check([output], run.Script.Name, parsed.GetValue(options.Force));
         OutputFiles files = new(run.Script.Name, parsed.GetValue(options.Force));
-        files.Add(output, PlateFiles.Write(layout, only, cancellation));
+        files.Add(output, PlateFiles.Write(layout, only, run.Findings, cancellation));
         files.Write(cancellation);
         if (!parsed.GetValue(options.Quiet))
             terminal.Output.WriteLine(output);

@@ -1,5 +1,5 @@
-using System.CommandLine;
 using System.Collections.Immutable;
+using System.CommandLine;
 using RuleAndCompass.Accuracy;
 using RuleAndCompass.CommandLine.Display;
 using RuleAndCompass.CommandLine.Json;

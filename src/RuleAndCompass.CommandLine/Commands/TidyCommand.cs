@@ -44,7 +44,7 @@ internal static class TidyCommand
     private static int Tidy(string path, bool checkOnly, bool quiet, Surroundings surroundings)
     {
         Terminal terminal = surroundings.Terminal;
-        ScriptFile script = ScriptFile.Read(path, terminal);
+        ScriptFile script = ScriptFile.Read(path, surroundings);
         Outcome<Script> read = ScriptReader.Read(script.Name, script.Text, cancellation: surroundings.Cancellation);
         if (read.Value is null || read.HasErrors)
         {

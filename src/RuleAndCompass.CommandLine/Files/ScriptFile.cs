@@ -1,6 +1,5 @@
 using System.Security.Cryptography;
 using System.Text;
-using RuleAndCompass.CommandLine.Display;
 
 namespace RuleAndCompass.CommandLine.Files;
 
@@ -25,12 +24,12 @@ internal sealed record ScriptFile(string Name, string Path, string Text)
 
     /// <summary>Reads a script.</summary>
     /// <exception cref="StopException">It can't be read.</exception>
-    public static ScriptFile Read(string path, Terminal terminal)
+    public static ScriptFile Read(string path, Surroundings surroundings)
     {
         if (path != StandardInput)
             return new(System.IO.Path.GetFileName(path), path, ReadText(path));
-        using Stream input = terminal.OpenInput();
-        return new(StandardInputName, path, Decode(StandardInputName, ReadAll(StandardInputName, input)));
+        using Stream input = surroundings.Terminal.OpenInput();
+        return new(StandardInputName, path, Decode(StandardInputName, ReadAll(StandardInputName, input, surroundings.Cancellation)));
     }
 
     /// <summary>Reads a text file.</summary>
@@ -42,7 +41,7 @@ internal sealed record ScriptFile(string Name, string Path, string Text)
             if (Directory.Exists(path))
                 throw new StopException(CommandLineFindings.CannotRead(path, "it is a folder"), ExitCode.FileTrouble);
             using FileStream file = new(path, FileMode.Open, FileAccess.Read, FileShare.Read);
-            return Decode(path, ReadAll(path, file));
+            return Decode(path, ReadAll(path, file, CancellationToken.None));
         }
         catch (Exception failure) when (failure is FileNotFoundException or DirectoryNotFoundException)
         {
@@ -68,11 +67,12 @@ internal sealed record ScriptFile(string Name, string Path, string Text)
         }
     }
 
-    private static byte[] ReadAll(string name, Stream stream)
+    // A read from a terminal or a pipe may wait for ever; an interruption does not wait for it.
+    private static byte[] ReadAll(string name, Stream stream, CancellationToken cancellation)
     {
         using MemoryStream whole = new();
         byte[] block = new byte[1 << 16];
-        for (int read; (read = stream.Read(block)) > 0;)
+        for (int read; (read = ReadBlock()) > 0;)
         {
             whole.Write(block, 0, read);
             if (whole.Length > MaximumBytes)
@@ -80,6 +80,10 @@ internal sealed record ScriptFile(string Name, string Path, string Text)
         }
 
         return whole.ToArray();
+
+        int ReadBlock() => cancellation.CanBeCanceled
+            ? Task.Run(() => stream.Read(block)).WaitAsync(cancellation).GetAwaiter().GetResult()
+            : stream.Read(block);
     }
 
     private static string Decode(string name, byte[] bytes)

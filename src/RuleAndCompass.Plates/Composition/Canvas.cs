@@ -6,6 +6,8 @@ namespace RuleAndCompass.Plates.Composition;
 /// <summary>A page in the making.</summary>
 internal sealed class Canvas
 {
+    private const double LongestUntied = 3.2;
+
     private readonly List<Item> items = [];
 
     public void Add(Item item) => items.Add(item);
@@ -27,6 +29,20 @@ internal sealed class Canvas
     /// <summary>A label whose capitals fill the height of a box made by <see cref="LabelSize"/>.</summary>
     public void Label(Role role, string text, Box box, Typeface typeface, double size, Ink ink) =>
         Write(role, text, new Spot(box.Left, box.Bottom - LabelDescent(size)), typeface, size, Anchor.Left, ink);
+
+    /// <summary>A thin line from a label that stands well off to what it belongs to.</summary>
+    /// <param name="clear">How far from the spot it ends, millimetres.</param>
+    public void Tie(Role role, PlacedLabel label, double clear, Pen pen)
+    {
+        Spot at = label.Anchor;
+        Spot nearest = new(Math.Clamp(at.X, label.Box.Left, label.Box.Right), Math.Clamp(at.Y, label.Box.Top, label.Box.Bottom));
+        double distance = at.DistanceTo(nearest);
+        if (distance > LongestUntied)
+        {
+            double part = clear / distance;
+            Line(role, new(at.X + (part * (nearest.X - at.X)), at.Y + (part * (nearest.Y - at.Y))), nearest, pen);
+        }
+    }
 
     /// <summary>The box a label needs: from its descenders to its capitals.</summary>
     public static (double Width, double Height) LabelSize(string text, Typeface typeface, double size) =>

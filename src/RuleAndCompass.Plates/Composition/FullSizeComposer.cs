@@ -66,7 +66,7 @@ internal sealed class FullSizeComposer
     }
 
     // Null where bars or words find no room.
-    private Page? ComposeOn(Box pageBox, Spot middle, bool isSheet)
+    private Page? ComposeOn(Box pageBox, Spot middle, bool isSheet, bool leavesNamesOut = false)
     {
         View view = new(middle, 1, pageBox);
         LabelPlacement placement = new(pageBox);
@@ -89,12 +89,12 @@ internal sealed class FullSizeComposer
             foreach (Words words in KeptShape.Letters(lettering, view))
             {
                 canvas.Add(words);
-                placement.Block(BoxOf(words), always);
+                placement.Block(KeptShape.BoxOf(words), always);
             }
         }
 
-        List<(Spot At, string Name)> pricks = Pricks(view);
-        foreach ((Spot at, _) in pricks)
+        List<(Spot At, string Name, bool IsOwn)> pricks = Pricks(view);
+        foreach ((Spot at, _, _) in pricks)
         {
             Cross(canvas, at);
             placement.Block(at.Moved(-CrossReach, 0), at.Moved(CrossReach, 0), always);
@@ -102,20 +102,29 @@ internal sealed class FullSizeComposer
         }
 
         // Bars and words first, since a name finds room more easily.
-        if (isSheet ? !InFreeRoom(canvas, placement, pageBox) : !BesideSheet(canvas, placement, pageBox, view.OnPage(tracing.Sheet)))
+        if (isSheet ? !InFreeRoom(canvas, placement, pageBox, leavesNamesOut) : !BesideSheet(canvas, placement, pageBox, view.OnPage(tracing.Sheet), leavesNamesOut))
         {
             return null;
         }
 
-        foreach ((Spot at, string name) in pricks)
+        foreach ((Spot at, string name, bool isOwn) in pricks)
         {
             cancellation.ThrowIfCancellationRequested();
             if (name.Length > 0)
             {
                 string shown = Typesetting.Fit(name, Typeface.Text, nameSize, 60);
                 (double width, double height) = Canvas.LabelSize(shown, Typeface.Text, nameSize);
-                PlacedLabel label = placement.Place(LabelPlacement.Around(at, width, height, NameGap), always);
-                canvas.Label(Role.Name, shown, label.Box, Typeface.Text, nameSize, Ink.Black);
+                PlacedLabel label = placement.Place(LabelPlacement.Around(at, width, height, NameGap), always, dropsUnreadable: true);
+                if (!label.IsUnreadable && (isOwn || !label.IsCrowded))
+                {
+                    canvas.Tie(Role.Name, label, CrossClear, Pens.Thin);
+                    canvas.Label(Role.Name, shown, label.Box, Typeface.Text, nameSize, Ink.Black);
+                }
+                else if (isOwn && !leavesNamesOut)
+                {
+                    // Once more, saying so.
+                    return ComposeOn(pageBox, middle, isSheet, leavesNamesOut: true);
+                }
             }
         }
 
@@ -148,11 +157,11 @@ internal sealed class FullSizeComposer
 
     // What has to go through onto the stock: the ends and centres of what is kept, points to be drilled, and points that no scale can measure; all named
     // points where nothing is kept or construction is shown.
-    private List<(Spot At, string Name)> Pricks(View view)
+    private List<(Spot At, string Name, bool IsOwn)> Pricks(View view)
     {
         Dictionary<Point, string> names = new(ReferenceEqualityComparer.Instance);
         Dictionary<(long, long), int> places = [];
-        List<(Spot At, string Name)> pricks = [];
+        List<(Spot At, string Name, bool IsOwn)> pricks = [];
         foreach (Trace trace in tracing.Traces)
         {
             if (trace is PointTrace point)
@@ -205,23 +214,24 @@ internal sealed class FullSizeComposer
 
         return pricks;
 
-        // Drawn once where several fall together; a name comes before none.
+        // Drawn once where several fall together. A point's own name comes before that of the piece which ends there, and that before none.
         void Add(Point point, string fallback)
         {
             Spot at = view.OnPage(Tracing.SpotOf(point));
-            string name = names.GetValueOrDefault(point, fallback);
+            bool isOwn = names.TryGetValue(point, out string? own);
+            string name = own ?? fallback;
             (long, long) place = ((long)Math.Round(at.X * 1e4), (long)Math.Round(at.Y * 1e4));
             if (places.TryGetValue(place, out int known))
             {
-                if (pricks[known].Name.Length == 0 || (names.ContainsKey(point) && !names.ContainsValue(pricks[known].Name)))
+                if (!pricks[known].IsOwn && (isOwn || pricks[known].Name.Length == 0))
                 {
-                    pricks[known] = (at, name);
+                    pricks[known] = (at, name, isOwn);
                 }
             }
             else if (view.Window.Holds(at))
             {
                 places.Add(place, pricks.Count);
-                pricks.Add((at, name));
+                pricks.Add((at, name, isOwn));
             }
         }
     }
@@ -238,9 +248,9 @@ internal sealed class FullSizeComposer
         }
     }
 
-    private bool InFreeRoom(Canvas canvas, LabelPlacement placement, Box page)
+    private bool InFreeRoom(Canvas canvas, LabelPlacement placement, Box page, bool leavesNamesOut)
     {
-        List<string> lines = WordLines(90, isSheet: true);
+        List<string> lines = WordLines(90, isSheet: true, leavesNamesOut);
         List<string> title = TitleLines(90);
         double wordsHeight = (title.Count * 5.5) + 2 + (lines.Count * 4);
         double wordsWidth = Math.Max(lines.Max(line => Typesetting.Width(line, Typeface.Text, wordSize)), title.Max(line => Typesetting.Width(line, Typeface.Strong, titleSize)));
@@ -270,12 +280,12 @@ internal sealed class FullSizeComposer
         void Block(Box box) => placement.Block(box, PlateSet.AllFrom(0));
     }
 
-    private bool BesideSheet(Canvas canvas, LabelPlacement placement, Box page, Box sheet)
+    private bool BesideSheet(Canvas canvas, LabelPlacement placement, Box page, Box sheet, bool leavesNamesOut)
     {
         double top = Math.Max(sheet.Bottom, Margin + BarLength) + Margin;
         Bar(canvas, new Spot(page.Right - Margin, Margin), false);
         Bar(canvas, new Spot(Margin, top + 10), true);
-        Write(canvas, TitleLines(100), WordLines(100, isSheet: false), new Spot(Margin + BarLength + 10, top));
+        Write(canvas, TitleLines(100), WordLines(100, isSheet: false, leavesNamesOut), new Spot(Margin + BarLength + 10, top));
         placement.Block(new Box(0, sheet.Bottom + 1, page.Right, page.Bottom), PlateSet.AllFrom(0));
         double y = top + StripHeight - 2;
         foreach ((double length, string says) in spans)
@@ -290,7 +300,7 @@ internal sealed class FullSizeComposer
         return true;
     }
 
-    private List<string> WordLines(double measure, bool isSheet)
+    private List<string> WordLines(double measure, bool isSheet, bool leavesNamesOut)
     {
         string size = StepPlateComposer.SheetText(layout.Sheet);
         List<string> words =
@@ -299,6 +309,11 @@ internal sealed class FullSizeComposer
             "Print at 100 %, not fitted to the page. Measure both bars before use: each is 100 mm.",
             .. Cautions.For(layout),
         ];
+        if (leavesNamesOut)
+        {
+            words.Add("Names that found no room are left out; the step plates show them.");
+        }
+
         if (options.ScriptName is not null)
         {
             words.Add($"From {options.ScriptName}.");
@@ -369,25 +384,5 @@ internal sealed class FullSizeComposer
         }
 
         return null;
-    }
-
-    private static Box BoxOf(Words words)
-    {
-        double width = Typesetting.Width(words.Text, words.Typeface, words.SizeMillimetres);
-        double height = words.SizeMillimetres * Face.CapitalHeight;
-        double left = words.Anchor switch
-        {
-            Anchor.Left => 0,
-            Anchor.Right => -width,
-            _ => -width / 2,
-        };
-        (double sine, double cosine) = Math.SinCos(words.TurnDegrees * Math.PI / 180);
-        Box box = new(words.At.X, words.At.Y, words.At.X, words.At.Y);
-        foreach ((double x, double y) in new[] { (left, 0.0), (left + width, 0.0), (left, height), (left + width, height) })
-        {
-            box = box.With(words.At.Moved((x * cosine) - (y * sine), -((x * sine) + (y * cosine))));
-        }
-
-        return box;
     }
 }

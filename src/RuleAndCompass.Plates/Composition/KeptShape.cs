@@ -71,6 +71,27 @@ internal static class KeptShape
         }
     }
 
+    /// <summary>The upright box round words, however they are turned.</summary>
+    public static Box BoxOf(Words words)
+    {
+        double width = Typesetting.Width(words.Text, words.Typeface, words.SizeMillimetres);
+        double height = words.SizeMillimetres * Face.CapitalHeight;
+        double left = words.Anchor switch
+        {
+            Anchor.Left => 0,
+            Anchor.Right => -width,
+            _ => -width / 2,
+        };
+        (double sine, double cosine) = Math.SinCos(words.TurnDegrees * Math.PI / 180);
+        Box box = new(words.At.X, words.At.Y, words.At.X, words.At.Y);
+        foreach ((double x, double y) in new[] { (left, 0.0), (left + width, 0.0), (left, height), (left + width, height) })
+        {
+            box = box.With(words.At.Moved((x * cosine) - (y * sine), -((x * sine) + (y * cosine))));
+        }
+
+        return box;
+    }
+
     // Each letter stands square to the circle through the place; the advance is measured along that circle, which is half the letters' height up.
     private static IEnumerable<Words> Bent(Lettering lettering, BentLie bent, View view, Spot at, double size, double height, Anchor anchor)
     {

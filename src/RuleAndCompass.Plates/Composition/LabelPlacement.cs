@@ -1,3 +1,4 @@
+using System.Runtime.InteropServices;
 using RuleAndCompass.Plates.Scene;
 
 namespace RuleAndCompass.Plates.Composition;
@@ -50,7 +51,8 @@ internal readonly record struct LabelPlace(Box Box, Spot Anchor);
 
 /// <summary>Where a label stands.</summary>
 /// <param name="IsCrowded">No free place was found: it lies on something.</param>
-internal readonly record struct PlacedLabel(Box Box, Spot Anchor, bool IsCrowded);
+/// <param name="IsUnreadable">It lies on another label.</param>
+internal readonly record struct PlacedLabel(Box Box, Spot Anchor, bool IsCrowded, bool IsUnreadable);
 
 /// <summary>
 /// Finds free places for names and numbers: inside the drawing, on no line and on no other label. Only what shows on a plate together is kept apart, so a
@@ -149,7 +151,8 @@ internal sealed class LabelPlacement(Box window)
 
     /// <summary>Takes the first of the places that is free, else the one that covers least, and blocks it.</summary>
     /// <param name="places">Best first.</param>
-    public PlacedLabel Place(IEnumerable<LabelPlace> places, PlateSet plates)
+    /// <param name="dropsUnreadable">Whether a label that would lie on another is left out, so that its place stays free.</param>
+    public PlacedLabel Place(IEnumerable<LabelPlace> places, PlateSet plates, bool dropsUnreadable = false)
     {
         LabelPlace best = default;
         double least = double.PositiveInfinity;
@@ -167,14 +170,19 @@ internal sealed class LabelPlacement(Box window)
             }
         }
 
-        Block(best.Box, plates);
-        return new(best.Box, best.Anchor, least > 0);
+        PlacedLabel label = new(best.Box, best.Anchor, least > 0, least >= LabelCost);
+        if (!label.IsUnreadable || !dropsUnreadable)
+        {
+            Block(best.Box, plates);
+        }
+
+        return label;
     }
 
     /// <summary>Places round a spot for a label of a size: beside it, then above and below, then in the corners, then further off.</summary>
     public static IEnumerable<LabelPlace> Around(Spot spot, double width, double height, double gap)
     {
-        foreach (double distance in new[] { gap, gap * 1.7, gap * 2.6, gap * 3.8, gap * 5.2, gap * 7 })
+        foreach (double distance in new[] { gap, gap * 1.7, gap * 2.6, gap * 3.8, gap * 5.2, gap * 7, gap * 9 })
         {
             double half = height / 2, slant = distance * 0.7;
             yield return At(spot.X + slant, spot.Y - slant - height);
@@ -222,7 +230,7 @@ internal sealed class LabelPlacement(Box window)
             {
                 if (cells[column + (row * columns)] is { } here)
                 {
-                    cost += Cost(here, box, plates);
+                    cost += Cost(here, box, plates, giveUpAt - cost);
                 }
             }
         }
@@ -230,9 +238,10 @@ internal sealed class LabelPlacement(Box window)
         return cost;
     }
 
-    private double Cost(List<int> here, Box box, PlateSet plates)
+    private double Cost(List<int> here, Box box, PlateSet plates, double giveUpAt)
     {
         double cost = 0;
+        ReadOnlySpan<Obstacle> all = CollectionsMarshal.AsSpan(obstacles);
         foreach (int number in here)
         {
             if (seen[number] == asked)
@@ -241,11 +250,15 @@ internal sealed class LabelPlacement(Box window)
             }
 
             seen[number] = asked;
-            Obstacle obstacle = obstacles[number];
+            ref readonly Obstacle obstacle = ref all[number];
             bool touches = obstacle.IsLine ? Clipping.Touches(obstacle.From, obstacle.To, box) : obstacle.Box.Overlaps(box);
             if (touches && obstacle.Plates.Meets(plates))
             {
                 cost += obstacle.IsLine ? LineCost : LabelCost;
+                if (cost >= giveUpAt)
+                {
+                    break;
+                }
             }
         }
 

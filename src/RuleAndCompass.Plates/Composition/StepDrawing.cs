@@ -17,7 +17,6 @@ internal sealed class StepDrawing
     private const double ProtractorRadius = 9;
     private const double TickInset = 4;
     private const double LongestName = 40;
-    private const double LongestUntied = 3.2;
     private const double MostOutside = 12;
 
     private static readonly double[] partsOfLine = [0.62, 0.75, 0.5, 0.86, 0.38, 0.25, 0.95, 0.12, 0.56, 0.69, 0.81, 0.44, 0.31, 0.19, 0.05];
@@ -78,10 +77,11 @@ internal sealed class StepDrawing
         Strokes(canvas, plan, last, present: true);
         KeptWork(canvas, plan, last);
         List<(Act Act, string Text, PlacedLabel Label)> numbers = [.. PlaceNumbers(plan)];
+        List<(string Text, PlacedLabel Label)> angles = [.. PlaceAngles(plan)];
         List<Mark> named = [.. MarksOn(plan).Where(names.ContainsKey)];
 
         // A label that found no free place gets a little bare paper round it; all of that lies under the signs.
-        foreach (PlacedLabel label in numbers.Select(number => number.Label).Concat(named.Select(mark => names[mark].Label)))
+        foreach (PlacedLabel label in numbers.Select(number => number.Label).Concat(angles.Select(angle => angle.Label)).Concat(named.Select(mark => names[mark].Label)))
         {
             if (label.IsCrowded)
             {
@@ -97,14 +97,19 @@ internal sealed class StepDrawing
 
         foreach ((Act act, string text, PlacedLabel label) in numbers)
         {
-            Leader(canvas, Role.Now, act.Makes is PointMark, label, Pens.NowThin);
+            canvas.Tie(Role.Now, label, act.Makes is PointMark ? Signs.RingRadius + 0.2 : 0, Pens.NowThin);
             canvas.Label(Role.Now, text, label.Box, Typeface.Strong, PlateFormat.NumberSize, Ink.Accent);
+        }
+
+        foreach ((string text, PlacedLabel label) in angles)
+        {
+            canvas.Label(Role.Now, text, label.Box, Typeface.Text, PlateFormat.NumberSize, Ink.Accent);
         }
 
         foreach (Mark mark in named)
         {
             (string text, PlacedLabel label) = names[mark];
-            Leader(canvas, Role.Name, mark is PointMark, label, Pens.Thin);
+            canvas.Tie(Role.Name, label, mark is PointMark ? Signs.RingRadius + 0.2 : 0, Pens.Thin);
             canvas.Label(Role.Name, text, label.Box, Typeface.Text, PlateFormat.NameSize, Ink.Black);
         }
     }
@@ -182,10 +187,15 @@ internal sealed class StepDrawing
             keptWork.AddRange(KeptShape.Outlines(kept, view).Select(outline => (from, (Item)new Stroke(Role.Kept, outline, pen))));
         }
 
+        // The piece is lettered when all the rest is done.
+        PlateSet lastPlate = PlateSet.Only(plans.Count - 1);
         foreach (Lettering lettering in layout.Letterings)
         {
-            int from = actOfPoint.GetValueOrDefault(lettering.At, int.MaxValue);
-            keptWork.AddRange(KeptShape.Letters(lettering, view).Select(words => (from, (Item)words)));
+            foreach (Words words in KeptShape.Letters(lettering, view))
+            {
+                keptWork.Add((int.MaxValue, words));
+                placement.Block(KeptShape.BoxOf(words), lastPlate);
+            }
         }
     }
 
@@ -338,6 +348,30 @@ internal sealed class StepDrawing
         }
     }
 
+    // The angle itself beside the protractor's arc.
+    private IEnumerable<(string Text, PlacedLabel Label)> PlaceAngles(PlatePlan plan)
+    {
+        for (int i = plan.First; i < plan.End; i++)
+        {
+            if (layout.Acts[i] is Protract protract && view.Window.Holds(SpotOf(protract.At)))
+            {
+                string text = AngleText(Math.Abs(protract.By.ToDegreesDouble()));
+                (double width, double height) = Canvas.LabelSize(text, Typeface.Text, PlateFormat.NumberSize);
+                yield return (text, placement.Place(AroundAngle(protract, width, height), PlateSet.Only(plan.Index)));
+            }
+        }
+    }
+
+    // Whole minutes as such, anything else as a decimal.
+    private static string AngleText(double degrees)
+    {
+        const double sameMinute = 1e-6;
+        double minutes = Math.Round(degrees * 60);
+        return Math.Abs((degrees * 60) - minutes) > sameMinute ? string.Create(CultureInfo.InvariantCulture, $"{degrees:0.##}°")
+            : minutes % 60 == 0 ? string.Create(CultureInfo.InvariantCulture, $"{minutes / 60}°")
+            : string.Create(CultureInfo.InvariantCulture, $"{Math.Floor(minutes / 60)}°{minutes % 60:00}′");
+    }
+
     private PlacedLabel? PlaceNumber(PlatePlan plan, Act act, string text)
     {
         (double width, double height) = Canvas.LabelSize(text, Typeface.Strong, PlateFormat.NumberSize);
@@ -358,19 +392,6 @@ internal sealed class StepDrawing
         return view.Window.Grown(MostOutside).Holds(label.Box) ? label : null;
     }
 
-    // A label that stands well off what it belongs to is tied to it.
-    private static void Leader(Canvas canvas, Role role, bool isPoint, PlacedLabel label, Pen pen)
-    {
-        Spot at = label.Anchor;
-        Spot nearest = new(Math.Clamp(at.X, label.Box.Left, label.Box.Right), Math.Clamp(at.Y, label.Box.Top, label.Box.Bottom));
-        double distance = at.DistanceTo(nearest);
-        if (distance > LongestUntied)
-        {
-            double part = isPoint ? (Signs.RingRadius + 0.2) / distance : 0;
-            canvas.Line(role, new(at.X + (part * (nearest.X - at.X)), at.Y + (part * (nearest.Y - at.Y))), nearest, pen);
-        }
-    }
-
     private static IEnumerable<LabelPlace> BesideSpan(Spot from, Spot to, double width, double height)
     {
         (Spot first, Spot second) = Signs.SpanBridge(from, to, 1);
@@ -389,7 +410,7 @@ internal sealed class StepDrawing
     {
         (double start, double sweep) = AngleOf(protract);
         Spot at = SpotOf(protract.At);
-        foreach (double radius in new[] { ProtractorRadius + 2.2, ProtractorRadius - 2.6, ProtractorRadius + 4.4 })
+        foreach (double radius in new[] { ProtractorRadius + 2.6, ProtractorRadius - 3, ProtractorRadius + 5.2, ProtractorRadius + 8 })
         {
             foreach (double part in new[] { 0.5, 0.3, 0.7, 1.2, -0.2 })
             {
@@ -550,9 +571,17 @@ internal sealed class StepDrawing
             places = BesideCurve(trace, width, height);
         }
 
-        if (places.Any())
+        if (!places.Any())
         {
-            names.Add(trace.Mark, (text, placement.Place(places, plates)));
+            return;
+        }
+
+        // A curve whose name would lie on another is told by its act's number; a point keeps its name.
+        bool isCurve = trace is not PointTrace;
+        PlacedLabel label = placement.Place(places, plates, dropsUnreadable: isCurve);
+        if (!isCurve || !label.IsUnreadable)
+        {
+            names.Add(trace.Mark, (text, label));
         }
     }
 

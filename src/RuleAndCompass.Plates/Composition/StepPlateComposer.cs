@@ -21,6 +21,7 @@ internal sealed class StepPlateComposer
     private const double OverEdge = 3;
     private const int MostMoved = 5;
     private const double NumberGap = 2.2;
+    private const double PastInThumbnail = 0.8;
     private const double RoomRoundUsed = 0.06;
 
     private readonly Layout layout;
@@ -419,16 +420,17 @@ internal sealed class StepPlateComposer
             Box box = Box.Of(row.Left + (i * (width + gap)), top, width, pictureHeight);
             double factor = Math.Min(box.Width / tracing.Sheet.Width, box.Height / tracing.Sheet.Height) * 0.94;
             View small = new(box.Middle, factor, box);
+            bool isBare = !tracing.Traces.Any(trace => trace is not PointTrace && layout.Acts[trace.Act - 1].Stage == stage);
             foreach (Trace trace in tracing.Traces)
             {
                 if (layout.Acts[trace.Act - 1].Stage == stage)
                 {
-                    if (trace is PointTrace point && box.Holds(small.OnPage(point.At)))
+                    if (isBare && trace is PointTrace point && box.Holds(small.OnPage(point.At)))
                     {
                         canvas.Fill(Role.Thumbnail, Outline.Circle(small.OnPage(point.At), 0.22), Ink.Black);
                     }
 
-                    foreach (Outline outline in small.Strokes(trace, 0))
+                    foreach (Outline outline in small.Strokes(trace, PastInThumbnail))
                     {
                         canvas.Draw(Role.Thumbnail, outline, Pens.Thin);
                     }

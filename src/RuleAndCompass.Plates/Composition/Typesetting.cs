@@ -58,10 +58,10 @@ internal static class Typesetting
         return lines;
     }
 
-    // A name's index stays on one line: I[11 1/2].
+    // A name's index stays on one line, I[11 1/2], and a figure with its unit.
     private static string KeptTogether(string text)
     {
-        if (!text.Contains('['))
+        if (!text.Contains('[') && !text.Contains(" mm", StringComparison.Ordinal))
         {
             return text;
         }
@@ -71,7 +71,8 @@ internal static class Typesetting
         for (int i = 0; i < signs.Length; i++)
         {
             depth = signs[i] == '[' ? depth + 1 : signs[i] == ']' ? Math.Max(0, depth - 1) : depth;
-            if (signs[i] == ' ' && depth > 0)
+            bool isBeforeUnit = i > 0 && char.IsAsciiDigit(signs[i - 1]) && text.AsSpan(i).StartsWith(" mm");
+            if (signs[i] == ' ' && (depth > 0 || isBeforeUnit))
             {
                 signs[i] = NoBreak;
             }

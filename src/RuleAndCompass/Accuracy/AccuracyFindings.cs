@@ -6,18 +6,18 @@ namespace RuleAndCompass.Accuracy;
 /// <summary>What the hand error finds wrong, one factory each.</summary>
 internal static class AccuracyFindings
 {
-    public static Diagnostic NotAnError(string name, double size) => new(
+    public static Diagnostic NotAnError(string name, double size, SourceSpan span) => new(
         "RC4001",
         Severity.Error,
         string.Create(CultureInfo.InvariantCulture, $"the hand's error `{name}` is {size}, and an error is a size from 0 up"),
-        default,
+        span,
         "give one standard deviation, as in `hand ordinary, but prick 0.15 mm`");
 
-    public static Diagnostic AbsurdError(string name, string size, string most) => new(
+    public static Diagnostic AbsurdError(string name, string size, string most, SourceSpan span) => new(
         "RC4002",
         Severity.Error,
         $"the hand's error `{name}` is {size}, more than a hand can be out on this sheet",
-        default,
+        span,
         $"give one standard deviation under {most}; an ordinary hand is out by a tenth of a millimetre or a quarter of a degree");
 
     public static Diagnostic TrialsOutsideLimits(int trials) => new(

@@ -43,14 +43,17 @@ internal sealed class BlameReasons
 
     private static string WhyCross(Cross cross)
     {
+        string first = cross.First.Name;
+        string second = cross.Second.Name;
         string curves = (cross.First is LineMark, cross.Second is LineMark) switch
         {
-            (true, true) => "the lines",
-            (false, false) => "the arcs",
-            _ => "line and arc",
+            (true, true) => $"the lines {first} and {second}",
+            (false, false) => $"the arcs {first} and {second}",
+            (true, false) => $"line {first} and arc {second}",
+            (false, true) => $"arc {first} and line {second}",
         };
         double degrees = CrossingAngle.Degrees((Geometry.Curve)cross.First.Figure, (Geometry.Curve)cross.Second.Figure, cross.Point.Point);
-        return $"{curves} {cross.First.Name} and {cross.Second.Name} cross at {degrees.ToString(degrees < 10 ? "0.#" : "0", CultureInfo.InvariantCulture)}°";
+        return $"{curves} cross at {degrees.ToString(degrees < 10 ? "0.#" : "0", CultureInfo.InvariantCulture)}°";
     }
 
     private string WhyLay(Lay lay)

@@ -1,6 +1,7 @@
 using System.Globalization;
 using RuleAndCompass.Bench;
 using RuleAndCompass.Language.Diagnostics;
+using RuleAndCompass.Language.Syntax;
 using RuleAndCompass.Making;
 
 namespace RuleAndCompass.Accuracy;
@@ -12,8 +13,11 @@ internal static class HandChecks
     private const double MostPartOfSheet = 0.25;
     private const double MostDegrees = 30;
 
-    public static IEnumerable<Diagnostic> Faults(Hand hand, Sheet sheet, HandErrorOptions options)
+    public static IEnumerable<Diagnostic> Faults(Layout layout, HandErrorOptions options)
     {
+        Hand hand = layout.Hand;
+        Sheet sheet = layout.Sheet;
+        SourceSpan span = layout.Script.Sentences.OfType<HandSentence>().FirstOrDefault()?.Span ?? default;
         double side = Math.Min(sheet.Width.ToDouble(), sheet.Height.ToDouble());
         (string Name, double Size, bool IsAngle)[] errors =
         [
@@ -28,9 +32,9 @@ internal static class HandChecks
         {
             double most = isAngle ? MostDegrees : side * MostPartOfSheet;
             if (!double.IsFinite(size) || size < 0)
-                yield return AccuracyFindings.NotAnError(name, size);
+                yield return AccuracyFindings.NotAnError(name, size, span);
             else if (size > most)
-                yield return AccuracyFindings.AbsurdError(name, Text(size, isAngle), Text(most, isAngle));
+                yield return AccuracyFindings.AbsurdError(name, Text(size, isAngle), Text(most, isAngle), span);
         }
 
         if (options.Trials is < 0 or > HandErrorOptions.MaximumTrials)

@@ -28,7 +28,7 @@ public static class HandError
     {
         ArgumentNullException.ThrowIfNull(layout);
         options ??= new HandErrorOptions();
-        ImmutableArray<Diagnostic> faults = [.. HandChecks.Faults(layout.Hand, layout.Sheet, options)];
+        ImmutableArray<Diagnostic> faults = [.. HandChecks.Faults(layout, options)];
         if (faults.Length > 0)
             return new Outcome<HandErrorReport>(null, faults);
 
@@ -40,18 +40,21 @@ public static class HandError
         if (subjects.IsEmpty)
             findings.Add(AccuracyFindings.NothingToMeasure());
 
-        Sweep sweep = new(program);
+        FirstOrderSweeps sweeps = new(program, Math.Max(1, options.BlameCount));
         Dictionary<Quantity, Figures> figures = [];
-        foreach (Quantity quantity in subjects.SelectMany(subject => subject.Far.Insert(0, subject.Quantity)))
+        foreach (Subject subject in subjects)
         {
             cancellation.ThrowIfCancellationRequested();
-            figures.Add(quantity, new Figures(quantity, FirstOrder.Of(quantity, program, sweep)));
+            figures.Add(subject.Quantity, new Figures(subject.Quantity, sweeps.Of(subject.Quantity, addToWhole: subject.Of == HandSubject.Comparison)));
+            IEnumerable<Quantity> others = subject.Minutes is { } minutes ? subject.Far.Add(minutes) : subject.Far;
+            foreach (Quantity other in others)
+                figures.Add(other, new Figures(other, sweeps.Of(other, addToWhole: false)));
         }
 
         RunTrials(program, [.. figures.Values], options, findings, progress, cancellation);
 
         BlameReasons reasons = new(layout.Acts, KeptEnds(layout));
-        ImmutableArray<HandResult> results = [.. subjects.Select(subject => Result(subject, figures, reasons, options))];
+        ImmutableArray<HandResult> results = [.. subjects.Select(subject => Result(subject, figures, reasons))];
         foreach (HandResult result in results.Where(result => result.Lost > 0 && result.Lost == options.Trials))
         {
             Blame? worst = result.Blame.FirstOrDefault();
@@ -64,7 +67,7 @@ public static class HandError
         ImmutableArray<HandSummary> summaries = Summaries(results);
         bool usesPlate = layout.Acts.Any(act => act is Locate { ByScale: false } or SetOpening { Opening: ScaleOpening { Setting: null } });
         HandErrorReport report = new(
-            results, summaries.FirstOrDefault(), summaries, Whole(subjects, figures, reasons, options.BlameCount), layout.Hand,
+            results, summaries.FirstOrDefault(), summaries, Whole(sweeps.Whole, subjects.Count(subject => subject.Of == HandSubject.Comparison), reasons, options.BlameCount), layout.Hand,
             usesPlate ? hand.PaperFraction : null, options.Trials, options.Seed);
         return new Outcome<HandErrorReport>(report, [.. findings]);
     }
@@ -88,7 +91,7 @@ public static class HandError
 
         Trials biases = new(program, [.. figures.Select(figure => figure.Quantity)], options.Seed);
         foreach ((Figures figure, double bias) in figures.Zip(biases.Biases()))
-            figure.Bias = bias;
+            figure.Bias = double.IsNaN(bias) ? 0 : bias;
         if (options.Trials == 0)
             return;
 
@@ -99,7 +102,7 @@ public static class HandError
             figure.Trials = distribution;
     }
 
-    private static HandResult Result(Subject subject, Dictionary<Quantity, Figures> figures, BlameReasons reasons, HandErrorOptions options)
+    private static HandResult Result(Subject subject, Dictionary<Quantity, Figures> figures, BlameReasons reasons)
     {
         Figures figure = figures[subject.Quantity];
         Distribution? trials = figure.Trials is { Kept: > 0 } some ? some : null;
@@ -107,13 +110,13 @@ public static class HandError
         double? far = subject.Far.IsEmpty
             ? size * subject.FarFactor
             : subject.Far.Max(end => figures[end].Size95);
-        (ImmutableArray<Blame> blame, double rest) = BlameList(Shares(figure), reasons, options.BlameCount);
+        ImmutableArray<Blame> blame = Blames(figure.FirstOrder.Shares, reasons);
         return new HandResult(
             subject.Label,
             subject.Of,
             subject.Index,
             subject.Kind,
-            double.IsNaN(figure.Bias) ? 0 : figure.Bias,
+            figure.Bias,
             figure.Sigma,
             figure.FirstOrder.Sigma,
             trials?.Percentile(0.025),
@@ -122,11 +125,11 @@ public static class HandError
             size,
             trials?.SizePercentile(0.99),
             far,
-            subject.RatePerHour is { } rate ? Math.Abs(size.GetValueOrDefault() / rate) * 60 : null,
+            subject.Minutes is { } minutes ? figures[minutes].Size95 : subject.RatePerHour is { } rate ? size / Math.Abs(rate) * 60 : null,
             figure.Trials?.Lost ?? 0,
             trials is null ? null : Disagreement(figure, trials, subject.Kind),
             blame,
-            rest);
+            blame.IsEmpty ? 0 : Math.Max(0, 1 - blame.Sum(act => act.Share)));
     }
 
     private static string? Disagreement(Figures figure, Distribution trials, QuantityKind kind)
@@ -137,7 +140,10 @@ public static class HandError
         double allowed = Math.Max(TellingDifference, ChanceFactor / Math.Sqrt(trials.Kept));
         double byTrials = figure.Quantity.IsPlace ? trials.SizePercentile(0.95) : (trials.Percentile(0.975) - trials.Percentile(0.025)) / 2;
         double expected = figure.FirstOrder.Size95!.Value; // Null only where Sigma is.
-        if (Math.Abs(figure.Sigma!.Value - sigma) <= allowed * sigma && Math.Abs(byTrials - expected) <= allowed * expected)
+
+        // First order leaves the bias out, and a distance can't be rid of it.
+        bool isBiased = figure.Quantity.IsPlace && figure.Bias > TellingDifference * sigma;
+        if (Math.Abs(figure.Sigma!.Value - sigma) <= allowed * sigma && (isBiased || Math.Abs(byTrials - expected) <= allowed * expected))
             return null;
         return $"first order says {Text(expected, kind)} at 95 %, the trials {Text(byTrials, kind)}; the trials are trusted";
     }
@@ -153,27 +159,19 @@ public static class HandError
         };
     }
 
-    private static IEnumerable<(int Act, double Share)> Shares(Figures figure)
-    {
-        double variance = figure.FirstOrder.VarianceByAct.Values.Sum();
-        return variance == 0 ? [] : figure.FirstOrder.VarianceByAct.Select(act => (act.Key, act.Value / variance));
-    }
+    private static ImmutableArray<Blame> Blames(ImmutableArray<ActShare> shares, BlameReasons reasons) =>
+        [.. shares.Select(share => new Blame(share.Act, share.Share, reasons.Why(share.Act)))];
 
-    private static (ImmutableArray<Blame> Blame, double Others) BlameList(IEnumerable<(int Act, double Share)> shares, BlameReasons reasons, int count)
+    private static ImmutableArray<Blame> Whole(double[] shares, int compared, BlameReasons reasons, int count)
     {
-        (int Act, double Share)[] ordered = [.. shares.Where(act => act.Share > 0).OrderByDescending(act => act.Share).ThenBy(act => act.Act)];
-        ImmutableArray<Blame> blame = [.. ordered.Take(count).Select(act => new Blame(act.Act, act.Share, reasons.Why(act.Act)))];
-        return (blame, ordered.Skip(count).Sum(act => act.Share));
-    }
+        List<ActShare> means = [];
+        for (int act = 0; act < shares.Length; act++)
+        {
+            if (shares[act] > 0)
+                means.Add(new ActShare(act, shares[act] / compared));
+        }
 
-    private static ImmutableArray<Blame> Whole(
-        ImmutableArray<Subject> subjects, Dictionary<Quantity, Figures> figures, BlameReasons reasons, int count)
-    {
-        Figures[] compared = [.. subjects.Where(subject => subject.Of == HandSubject.Comparison).Select(subject => figures[subject.Quantity])];
-        Dictionary<int, double> shares = [];
-        foreach ((int act, double share) in compared.SelectMany(Shares))
-            shares[act] = shares.GetValueOrDefault(act) + share / compared.Length;
-        return BlameList(shares.Select(share => (share.Key, share.Value)), reasons, count).Blame;
+        return Blames(FirstOrderSweeps.Largest(means, count), reasons);
     }
 
     // The kind most compared first; of two alike the one compared earlier.
@@ -195,6 +193,7 @@ public static class HandError
 
         public FirstOrder FirstOrder { get; } = firstOrder;
 
+        /// <summary>Zero where the rounding alone loses a crossing.</summary>
         public double Bias { get; set; }
 
         public Distribution? Trials { get; set; }
@@ -203,7 +202,7 @@ public static class HandError
         {
             null => FirstOrder.Sigma,
             { Kept: 0 } => null,
-            { } trials => Quantity.IsPlace ? trials.RootMeanSquare : trials.Deviation,
+            { } trials => Quantity.IsPlace ? Math.Sqrt(Math.Max(0, trials.RootMeanSquare * trials.RootMeanSquare - Bias * Bias)) : trials.Deviation,
         };
 
         public double? Size95 => Trials switch

@@ -48,7 +48,7 @@ public sealed record Blame(int Act, double Share, string Why);
 /// Millimetres that 95 in 100 stay within at the far end: of a kept line, at the worse of its kept ends; of a compared angle, at the far end of what is kept of
 /// its line. Null where there is none.
 /// </param>
-/// <param name="MinutesOfTime95"><paramref name="Size95"/> in minutes of time, where timed.</param>
+/// <param name="MinutesOfTime95"><paramref name="Size95"/> in minutes of time, where timed; for a place its part along the path.</param>
 /// <param name="Lost">Trials in which a crossing it needs was lost; the other figures are of the rest.</param>
 /// <param name="Disagreement">Where first order and trials differ by more than 10 %, what each says; the trials are trusted.</param>
 /// <param name="Blame">The acts that cause most of the variance, largest share first.</param>

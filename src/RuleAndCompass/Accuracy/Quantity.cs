@@ -11,19 +11,20 @@ internal sealed class Quantity
 
     private readonly bool isAngle;
 
-    public Quantity(Gauge gauge, ActProgram program, bool isAngle)
+    /// <param name="exact">The slots without errors.</param>
+    public Quantity(Gauge gauge, ReadOnlySpan<Vector256<double>> exact, bool isAngle)
     {
         Gauge = gauge;
-        Nominal = gauge.Value(program.Nominal);
+        Nominal = gauge.Replay(exact)[0];
         this.isAngle = isAngle;
     }
 
-    public Quantity(Gauge x, Gauge y, ActProgram program)
+    public Quantity(Gauge x, Gauge y, ReadOnlySpan<Vector256<double>> exact)
     {
         Gauge = x;
         GaugeY = y;
-        Nominal = x.Value(program.Nominal);
-        NominalY = y.Value(program.Nominal);
+        Nominal = x.Replay(exact)[0];
+        NominalY = y.Replay(exact)[0];
     }
 
     public Gauge Gauge { get; }

@@ -32,16 +32,8 @@ internal static class BenchFindings
             : "use finer dividers, or a larger layout",
         act.File);
 
-    public static Diagnostic NoDividers(Act act, double openingMillimetres) => new(
-        "RC3104",
-        Severity.Warning,
-        $"act {act.Number}: the kit has nothing to set to {Millimetres(openingMillimetres)}",
-        act.Span,
-        "add `dividers` to the kit",
-        act.File);
-
     public static Diagnostic LineTooLong(Act act, string line, double lengthMillimetres, double edgeMillimetres) => new(
-        "RC3105",
+        "RC3104",
         Severity.Warning,
         $"act {act.Number}: `{line}` is needed over {Millimetres(lengthMillimetres)}, and the straightedge is {Millimetres(edgeMillimetres)} long",
         act.Span,
@@ -49,7 +41,7 @@ internal static class BenchFindings
         act.File);
 
     public static Diagnostic WeakCrossing(Act act, string point, string first, string second, double degrees, string mend) => new(
-        "RC3106",
+        "RC3105",
         Severity.Warning,
         $"act {act.Number}: `{first}` and `{second}` cross at {Degrees(degrees)}, so `{point}` is loose along them: {Times(degrees)} the error of a square crossing",
         act.Span,
@@ -57,7 +49,7 @@ internal static class BenchFindings
         act.File);
 
     public static Diagnostic ShortBase(Act act, string line, string first, string second, double baseMillimetres, double usedMillimetres) => new(
-        "RC3107",
+        "RC3106",
         Severity.Warning,
         $"act {act.Number}: `{line}` is laid to `{first}` and `{second}`, {Millimetres(baseMillimetres)} apart, and used over {Millimetres(usedMillimetres)}",
         act.Span,
@@ -65,7 +57,7 @@ internal static class BenchFindings
         act.File);
 
     public static Diagnostic PointsTooNear(Act act, string point, string other, int otherAct, double apartMillimetres) => new(
-        "RC3108",
+        "RC3107",
         Severity.Warning,
         $"act {act.Number}: `{point}` is pricked {Millimetres(apartMillimetres)} from `{other}` of act {otherAct}: the two can't be told apart at the bench",
         act.Span,

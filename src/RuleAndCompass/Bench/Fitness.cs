@@ -205,11 +205,9 @@ internal sealed class Fitness
     {
         Real opening = set.Opening.Length;
         double millimetres = opening.ToDouble();
+        // Without any of the two nothing is set: such a want is refused before it comes to acts.
         if ((set.Beam ? work.Kit.Beam : work.Kit.Dividers ?? work.Kit.Beam) is not { } reach)
-        {
-            findings.Add(BenchFindings.NoDividers(set, millimetres));
             return;
-        }
 
         bool isTooWide = IsOver(millimetres - reach.Greatest.ToDouble(), ClearMillimetres, () => opening - reach.Greatest);
         if (isTooWide || IsOver(reach.Least.ToDouble() - millimetres, ClearMillimetres, () => reach.Least - opening))

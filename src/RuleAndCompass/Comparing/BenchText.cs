@@ -40,7 +40,7 @@ public static class BenchText
     public static string Of(Hand hand)
     {
         ArgumentNullException.ThrowIfNull(hand);
-        return FormattableString.Invariant($"{hand.Name}: prick {hand.PrickMillimetres} mm, edge {hand.EdgeMillimetres} mm, opening {hand.OpeningMillimetres} mm, ")
-            + FormattableString.Invariant($"scale {hand.ScaleMillimetres} mm, protractor {hand.ProtractorDegrees}°, square {hand.SquareDegrees}°");
+        return FormattableString.Invariant($"{hand.Name}: prick {hand.PrickMillimetres:0.####} mm, edge {hand.EdgeMillimetres:0.####} mm, opening {hand.OpeningMillimetres:0.####} mm, ")
+            + FormattableString.Invariant($"scale {hand.ScaleMillimetres:0.####} mm, protractor {hand.ProtractorDegrees:0.####}°, square {hand.SquareDegrees:0.####}°");
     }
 }

@@ -71,7 +71,9 @@ internal static class QuantityText
     {
         if (value == 0 || !double.IsFinite(value))
             return value == 0 ? "0" : "not to be told";
-        int places = Math.Clamp(significant - 1 - (int)Math.Floor(Math.Log10(Math.Abs(value))), 0, 15);
-        return value.ToString($"F{places}", CultureInfo.InvariantCulture);
+        // By way of the exponent form, since rounding may lead to one figure more before the point: 0.997 is 1.0.
+        string rounded = value.ToString($"E{significant - 1}", CultureInfo.InvariantCulture);
+        int exponent = int.Parse(rounded.AsSpan(rounded.IndexOf('E', StringComparison.Ordinal) + 1), NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture);
+        return value.ToString($"F{Math.Clamp(significant - 1 - exponent, 0, 15)}", CultureInfo.InvariantCulture);
     }
 }

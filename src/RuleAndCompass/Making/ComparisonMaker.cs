@@ -91,7 +91,9 @@ internal sealed class ComparisonMaker(Evaluator evaluator, Decider decider)
         if (sentence.ComputedPlace is { } place)
         {
             QuantityValue x = evaluator.Length(place.X), y = evaluator.Length(place.Y);
-            return WithRate(comparison, timedBy, PathRate(comparison, Rate(x.Trace, by, sentence), Rate(y.Trace, by, sentence)));
+            (double X, double Y) rate = (Rate(x.Trace, by, sentence), Rate(y.Trace, by, sentence));
+            Comparison timed = WithRate(comparison, timedBy, PathRate(comparison, rate.X, rate.Y));
+            return timed.RatePerHour is null ? timed : timed with { PathRate = rate };
         }
 
         return WithRate(comparison, timedBy, Rate(Evaluator.TraceOf(evaluator.Evaluate(sentence.Computed!)), by, sentence));

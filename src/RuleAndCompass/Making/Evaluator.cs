@@ -339,9 +339,9 @@ internal sealed class Evaluator(Decider decider)
             {
                 Value of = Evaluate(call.Arguments[0]);
                 if (of is AngleValue angle)
-                    return decider.Sign(angle.Angle.Degrees) < 0 ? new AngleValue(-angle.Angle, Traced("-", angle.Trace)) : angle;
+                    return decider.Recording(() => decider.Sign(angle.Angle.Degrees)) < 0 ? new AngleValue(-angle.Angle, Traced("-", angle.Trace)) : angle;
                 QuantityValue quantity = Quantity(call.Arguments[0]);
-                return decider.Sign(quantity.Amount) < 0 ? new QuantityValue(-quantity.Amount, quantity.Dimension, Traced("-", quantity.Trace)) : quantity;
+                return decider.Recording(() => decider.Sign(quantity.Amount)) < 0 ? new QuantityValue(-quantity.Amount, quantity.Dimension, Traced("-", quantity.Trace)) : quantity;
             }
 
             case "min" or "max":

@@ -83,6 +83,9 @@ public sealed record Comparison(
     SourceSpan Span,
     string? File)
 {
+    /// <summary>For a place that is timed: how its formula moves with the hour, across and up, in millimetres an hour.</summary>
+    public (double X, double Y)? PathRate { get; init; }
+
     /// <summary>The difference in minutes of time, where timed.</summary>
     public double? MinutesOfTime => RatePerHour is { } rate ? Difference.ToDouble() / rate * 60 : null;
 }
@@ -179,6 +182,11 @@ public sealed record Layout(
     ImmutableArray<Lettering> Letterings,
     bool IsDial)
 {
+    /// <summary>For each given that choices, claims and comparisons depend on: over which values they all stay as they are. Worked out when first asked for.</summary>
+    public ImmutableArray<ValidFor> ValidRanges => validRanges ??= Decider.FindRanges();
+
+    private ImmutableArray<ValidFor>? validRanges;
+
     /// <summary>Decides and prints exact values for reports of this layout.</summary>
     public required Decider Decider { get; init; }
 }

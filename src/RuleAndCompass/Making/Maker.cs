@@ -210,7 +210,7 @@ public sealed partial class Maker
                 Claim(claim);
                 break;
             case CompareSentence compare:
-                comparisons.Add(new ComparisonMaker(evaluator, decider).Compare(compare, followed?.Span, Add));
+                comparisons.Add(decider.Recording(() => new ComparisonMaker(evaluator, decider).Compare(compare, followed?.Span, Add)));
                 break;
             case KeepSentence keep:
                 kept.AddRange(new Keeping(evaluator, decider).Keep(keep));
@@ -362,7 +362,7 @@ public sealed partial class Maker
                 break;
             }
 
-            (bool? holds, Verdict verdict) = new Conditions(evaluator, decider).Test(condition);
+            (bool? holds, Verdict verdict) = decider.Recording(() => new Conditions(evaluator, decider).Test(condition));
             if (holds is null)
                 throw new FaultException(MakingFindings.Undecided($"whether `{condition}`", verdict, condition.Span));
             if (holds.Value)
@@ -472,7 +472,7 @@ public sealed partial class Maker
     {
         Conditions conditions = new(evaluator, decider);
         string says = conditions.Says(claim.Condition);
-        (bool? holds, Verdict verdict) = conditions.Test(claim.Condition);
+        (bool? holds, Verdict verdict) = decider.Recording(() => conditions.Test(claim.Condition));
         string? by = holds == false ? conditions.ByHowMuch : null;
         claims.Add(new(says, holds, verdict, by, followed?.Span ?? claim.Span, null));
         if (holds == false)

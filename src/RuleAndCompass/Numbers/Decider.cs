@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using System.Globalization;
 using System.Numerics;
 
@@ -8,12 +9,20 @@ public sealed class Decider
 {
     private const int FirstBits = 128;
     private const int SuspectZero = -56;
+    private const int FewRoots = 16;
+
+    // Against sizes near 1 a double's interval after a hundred steps is below this.
+    private const double NearZero = 1e-9;
     private const int MostBitsUnresolved = 4096;
     private const int MostBitsUndecided = 2048;
 
     private readonly DeciderOptions options;
     private readonly CancellationToken cancellation;
     private readonly SeededBits random;
+    private readonly List<Real> apart = [];
+    private readonly List<Real> vanishing = [];
+    private bool hasSpecific;
+    private bool records;
 
     /// <summary>Decides within the limits of <paramref name="options"/>.</summary>
     public Decider(DeciderOptions options, CancellationToken cancellation = default)
@@ -29,10 +38,55 @@ public sealed class Decider
 
     /// <summary>The sign of <paramref name="x"/>, with how it is known; may be undecided for quantities without exact value.</summary>
     /// <exception cref="UndecidedException">The limits were reached.</exception>
-    public Decision Decide(Real x)
+    public Decision Decide(Real x) => Record(x, Reach(x));
+
+    /// <summary>Keeps what is decided meanwhile, so that <see cref="FindRanges"/> can tell how far it holds: for the decisions on which a figure depends.</summary>
+    public T Recording<T>(Func<T> decide)
+    {
+        bool before = records;
+        records = true;
+        try
+        {
+            return decide();
+        }
+        finally
+        {
+            records = before;
+        }
+    }
+
+    /// <summary>For each given that recorded decisions depend on: over which part of its range they all stay as they are.</summary>
+    public ImmutableArray<ValidFor> FindRanges() => ValidRange.Of(apart, vanishing, hasSpecific);
+
+    private Decision Record(Real x, Decision decision)
+    {
+        if (!records || x is RationalReal || !decision.Verdict.IsDecided)
+            return decision;
+        if (decision.Sign != 0)
+            apart.Add(x);
+        else
+            vanishing.Add(x);
+        // A zero at the very values of the givens, which is no theorem, holds nowhere else.
+        hasSpecific |= decision.Sign == 0 && decision.Verdict.Certainty is not (Certainty.ProvedForEvery or Certainty.CertainForEvery) && StraightLine.LeavesOf(x).Exists(ValidRange.IsNamed);
+        return decision;
+    }
+
+    private Decision Reach(Real x)
     {
         if (SignOfEnclosure(x) is { } quick)
             return new Decision(quick, Verdict.Proved);
+
+        // A number that doubles cannot tell from zero is zero, nearly always: where the field is small, ask it before any ball.
+        WorkLimit limit = NewLimit();
+        bool? isZero = false;
+        StraightLine? line = LooksZero(x) ? StraightLine.Compile(x, Specific) : null;
+        bool asked = line is not null && line.Roots <= FewRoots && !line.HasLeaves;
+        if (asked)
+        {
+            isZero = DecideZero(x, line, limit, out Verdict? verdict);
+            if (isZero == true)
+                return new Decision(0, verdict!);
+        }
 
         int bits = FirstBits;
         for (; bits <= MostBitsUnresolved; bits *= 2)
@@ -44,9 +98,12 @@ public sealed class Decider
                 break;
         }
 
-        bool? isZero = DecideZero(x, out Verdict? verdict);
-        if (isZero == true)
-            return new Decision(0, verdict!);
+        if (!asked)
+        {
+            isZero = DecideZero(x, line, limit, out Verdict? verdict);
+            if (isZero == true)
+                return new Decision(0, verdict!);
+        }
 
         // Not zero, or nobody knows: ever finer balls.
         int most = isZero == false ? options.MaximumBits : Math.Min(options.MaximumBits, MostBitsUndecided);
@@ -68,7 +125,11 @@ public sealed class Decider
     public int Sign(Real x)
     {
         if (SignOfEnclosure(x) is { } quick)
+        {
+            if (records)
+                Record(x, new Decision(quick, Verdict.Proved));
             return quick;
+        }
 
         Decision decision = Decide(x);
         if (!decision.Verdict.IsDecided)
@@ -185,9 +246,19 @@ public sealed class Decider
 
             // 10^(magnitude) ≤ |x| up to one too many, which the rounding below puts right.
             int magnitude = (int)Math.Floor((BigInteger.Log10(BigInteger.Abs(ball.Middle)) + ball.Exponent * 0.30102999566398120));
-            string text = DecimalText.Write(RoundedAt(x, significantDigits - 1 - magnitude), significantDigits - 1 - magnitude, trim: true);
-            return text;
+            int places = significantDigits - 1 - magnitude;
+            BigInteger rounded = RoundedAt(x, places);
+            return DecimalText.Write(rounded, places, trim: Ends(x, rounded, places));
         }
+    }
+
+    // A nought at the end is left out only where the decimal ends there; else it is a certain digit like any other.
+    private bool Ends(Real x, BigInteger rounded, int places)
+    {
+        if (!(rounded % 10).IsZero)
+            return true;
+        Rational value = places >= 0 ? new Rational(rounded, BigInteger.Pow(10, places)) : rounded * BigInteger.Pow(10, -places);
+        return x.TryGetRational(out Rational exact) ? exact == value : Decide(x - value).IsZero;
     }
 
     /// <summary>A decimal rounded to <paramref name="places"/> decimals, certain.</summary>
@@ -221,7 +292,7 @@ public sealed class Decider
     /// <summary>Whether <paramref name="x"/> is zero, by the field alone, whatever its enclosures say.</summary>
     internal bool IsExactlyZero(Real x, out Verdict verdict)
     {
-        bool? isZero = DecideZero(x, out Verdict? known);
+        bool? isZero = DecideZero(x, null, NewLimit(), out Verdict? known);
         verdict = known ?? Verdict.Proved;
         return isZero == true;
     }
@@ -242,19 +313,28 @@ public sealed class Decider
         return magnitude >= 0 ? 0 : (int)(-(long)magnitude * 30103 / 100000);
     }
 
-    private bool? DecideZero(Real x, out Verdict? verdict)
+    // Within rounding of zero as far as doubles know, beside the numbers it was made from.
+    private static bool LooksZero(Real x)
+    {
+        double size = Math.Max(-x.Low, x.High);
+        double beside = 1;
+        if (x is OperationReal { Operation: Operation.Add or Operation.Subtract } sum)
+            beside = Math.Max(Math.Abs(sum.Left.High), Math.Abs(sum.Right!.High));
+        return size < beside * NearZero;
+    }
+
+    private bool? DecideZero(Real x, StraightLine? line, WorkLimit limit, out Verdict? verdict)
     {
         verdict = null;
-        WorkLimit limit = NewLimit();
-        List<Real> leaves = StraightLine.LeavesOf(x);
-        if (leaves.Count > 0)
+        line ??= StraightLine.Compile(x, Specific);
+        if (line is null || line.HasLeaves)
         {
+            List<Real> leaves = StraightLine.LeavesOf(x);
             verdict = new GenericPoint(leaves, random, limit).TryVanishing(x, MaximumDegree);
             if (verdict is not null)
                 return true;
         }
 
-        StraightLine? line = StraightLine.Compile(x, Specific);
         if (line is null)
         {
             verdict = CyclotomicField.TryVanishing(x, random, limit);

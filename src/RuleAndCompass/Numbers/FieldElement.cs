@@ -34,15 +34,22 @@ internal sealed record FieldElement(ulong Generators, BigInteger[] Coefficients,
     public FieldElement Over(BigInteger divisor) =>
         divisor.Sign < 0 ? Negated().Over(-divisor) : Normal(Generators, (BigInteger[])Coefficients.Clone(), Denominator * divisor);
 
-    public FieldElement Times(BigInteger factor)
+    public FieldElement Times(BigInteger factor) => Scaled(factor, BigInteger.One);
+
+    /// <summary>This element times <paramref name="factor"/> over <paramref name="divisor"/>, which is not zero.</summary>
+    public FieldElement Scaled(BigInteger factor, BigInteger divisor)
     {
         if (factor.IsZero)
             return Zero;
+        if (factor.IsOne && divisor.IsOne)
+            return this;
+        if (divisor.Sign < 0)
+            (factor, divisor) = (-factor, -divisor);
 
         var coefficients = new BigInteger[Coefficients.Length];
         for (int i = 0; i < coefficients.Length; i++)
-            coefficients[i] = Coefficients[i] * factor;
-        return Normal(Generators, coefficients, Denominator);
+            coefficients[i] = Coefficients[i].IsZero ? BigInteger.Zero : Coefficients[i] * factor;
+        return Lowest(Generators, coefficients, divisor.IsOne ? Denominator : Denominator * divisor);
     }
 
     public bool SameAs(FieldElement other) => Generators == other.Generators
@@ -72,6 +79,70 @@ internal sealed record FieldElement(ulong Generators, BigInteger[] Coefficients,
             generators &= ~(rest & (~rest + 1));
         }
 
+        return Lowest(generators, coefficients, denominator);
+    }
+
+    /// <summary>The same for machine integers, which are left changed.</summary>
+    public static FieldElement Normal(ulong generators, Span<long> coefficients, BigInteger denominator)
+    {
+        int position = 0;
+        for (ulong rest = generators; rest != 0; rest &= rest - 1)
+        {
+            int bit = 1 << position;
+            long used = 0;
+            for (int i = 0; i < coefficients.Length; i++)
+            {
+                if ((i & bit) != 0)
+                    used |= coefficients[i];
+            }
+
+            if (used != 0)
+            {
+                position++;
+                continue;
+            }
+
+            int fewer = coefficients.Length / 2;
+            for (int i = 0; i < fewer; i++)
+                coefficients[i] = coefficients[(i & ~(bit - 1)) << 1 | i & (bit - 1)];
+            coefficients = coefficients[..fewer];
+            generators &= ~(rest & (~rest + 1));
+        }
+
+        var result = new BigInteger[coefficients.Length];
+        if (denominator.IsOne || denominator.GetBitLength() > 62)
+        {
+            for (int i = 0; i < result.Length; i++)
+                result[i] = coefficients[i];
+            return Lowest(generators, result, denominator);
+        }
+
+        ulong small = (ulong)denominator;
+        ulong common = small;
+        if (BitOperations.IsPow2(common))
+        {
+            long any = 0;
+            foreach (long coefficient in coefficients)
+                any |= coefficient;
+            common = 1UL << Math.Min(BitOperations.TrailingZeroCount(common), BitOperations.TrailingZeroCount(any));
+        }
+        else
+        {
+            for (int i = 0; i < coefficients.Length && common != 1; i++)
+            {
+                ulong other = (ulong)Math.Abs(coefficients[i]);
+                while (other != 0)
+                    (common, other) = (other, common % other);
+            }
+        }
+
+        for (int i = 0; i < result.Length; i++)
+            result[i] = common == 1 ? coefficients[i] : coefficients[i] / (long)common;
+        return new FieldElement(generators, result, common == 1 ? denominator : small / common);
+    }
+
+    private static FieldElement Lowest(ulong generators, BigInteger[] coefficients, BigInteger denominator)
+    {
         if (!denominator.IsOne)
         {
             BigInteger common = denominator;

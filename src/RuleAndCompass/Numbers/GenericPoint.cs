@@ -122,7 +122,7 @@ internal sealed class GenericPoint
         if (leaf is not DirectionReal direction)
         {
             unknownOf[leaf] = unknowns.Count;
-            unknowns.Add(new Unknown(null, leaf) { Words = leaf is GivenReal given ? Words(given.Name, given.From, given.To, "") : null });
+            unknowns.Add(new Unknown(null, leaf) { Words = leaf is GivenReal given ? given.Name : null });
             return;
         }
 
@@ -131,8 +131,7 @@ internal sealed class GenericPoint
         {
             at = unknowns.Count;
             AngleSource source = direction.Source;
-            string? words = source.Name is null ? null : Words(source.Name, source.From, source.To, "°");
-            unknowns.Add(new Unknown(source, null) { Unit = direction.Multiple.Abs(), Words = words });
+                        unknowns.Add(new Unknown(source, null) { Unit = direction.Multiple.Abs(), Words = source.Name });
         }
         else
         {
@@ -141,9 +140,6 @@ internal sealed class GenericPoint
 
         unknownOf[leaf] = at;
     }
-
-    private static string Words(string name, Rational? from, Rational? to, string sign) =>
-        from is { } low && to is { } high ? $"{name} from {low}{sign} to {high}{sign}" : name;
 
     private static Rational CommonMeasure(Rational a, Rational b)
     {

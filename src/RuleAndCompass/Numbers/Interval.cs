@@ -59,6 +59,33 @@ internal readonly struct Interval(double low, double high)
         return new(Math.Max(root.Low, 0), root.High);
     }
 
+    /// <summary>An operation on intervals that stand for whole pieces; a radicand is not negative.</summary>
+    public static Interval Apply(Operation operation, Interval a, Interval b) => operation switch
+    {
+        Operation.Add => Outward(a.Low + b.Low, a.High + b.High),
+        Operation.Subtract => Outward(a.Low - b.High, a.High - b.Low),
+        Operation.Multiply => Hull(a.Low * b.Low, a.Low * b.High, a.High * b.Low, a.High * b.High),
+        Operation.Divide when b.Low > 0 || b.High < 0 => Hull(a.Low / b.Low, a.Low / b.High, a.High / b.Low, a.High / b.High),
+        Operation.Sqrt => Outward(Math.Sqrt(Math.Max(a.Low, 0)), Math.Sqrt(Math.Max(a.High, 0))),
+        _ => Everything,
+    };
+
+    /// <summary>The square, which is not negative however the interval lies.</summary>
+    public static Interval Square(Interval a)
+    {
+        Interval square = Apply(Operation.Multiply, a, a);
+        return new(a.Low <= 0 && a.High >= 0 ? 0 : Math.Max(0, square.Low), square.High);
+    }
+
+    /// <summary>What lies in both of two intervals that hold one number; one alone where rounding parts them.</summary>
+    public static Interval Meet(Interval a, Interval b)
+    {
+        double low = Math.Max(a.Low, b.Low), high = Math.Min(a.High, b.High);
+        return low <= high ? new(low, high) : a;
+    }
+
+    private static Interval Hull(double p, double q, double r, double s) => Outward(Math.Min(Math.Min(p, q), Math.Min(r, s)), Math.Max(Math.Max(p, q), Math.Max(r, s)));
+
     private static Interval Outward(double low, double high)
     {
         if (double.IsNaN(low) || double.IsNaN(high))

@@ -34,9 +34,9 @@ internal sealed class JointField
     private readonly Tower tower;
     private readonly FieldElement?[] elements;
     private readonly FieldElement?[] roots;
-    private readonly int[] fresh;
-    private readonly House[] houses;
-    private readonly bool[] nestedByImage = new bool[64];
+    private int[] fresh = [];
+    private House[] houses = [];
+    private ulong nestedByImage;
     private readonly List<int> freshInstructions = [];
     private readonly List<ModularImage> images = [];
     private int housed;
@@ -52,9 +52,6 @@ internal sealed class JointField
         tower = new Tower(limit);
         elements = new FieldElement?[line.Count];
         roots = new FieldElement?[line.Count];
-        fresh = new int[line.Count];
-        houses = new House[line.Count];
-        Array.Fill(fresh, -1);
     }
 
     public StraightLine Line { get; }
@@ -79,7 +76,10 @@ internal sealed class JointField
             if (step.Operation == Operation.Sqrt)
                 Adjoin(i);
             else if (step.Operation == Operation.Divide && (freshInstructions.Count > 0 || tower.Degree > maximumDegree))
+            {
+                StartImages();
                 SimplifyDivisor(step.Right);
+            }
         }
 
         bits = 0;
@@ -90,6 +90,7 @@ internal sealed class JointField
             return zero;
         }
 
+        StartImages();
         if (!VanishesInImages(Line.Result, default))
             return false;
 
@@ -123,6 +124,7 @@ internal sealed class JointField
             return;
         }
 
+        StartImages();
         int radicand = Line[at].Left;
         if (elements[radicand] is { } known)
         {
@@ -144,7 +146,7 @@ internal sealed class JointField
             // No square here, so none in the field.
             images.RemoveAt(i);
             fresh[at] = tower.AdjoinFresh();
-            nestedByImage[fresh[at]] = true;
+            nestedByImage |= 1UL << fresh[at];
             freshInstructions.Add(at);
             return;
         }
@@ -163,6 +165,15 @@ internal sealed class JointField
 
         MakeFreshExact();
         AdjoinExactly(at);
+    }
+
+    private void StartImages()
+    {
+        if (fresh.Length != 0)
+            return;
+        fresh = new int[Line.Count];
+        Array.Fill(fresh, -1);
+        houses = new House[Line.Count];
     }
 
     // A squared distance is often rational whatever its ends are; knowing it keeps the bounds small from there on.
@@ -208,11 +219,11 @@ internal sealed class JointField
     {
         for (int generator = 0; generator < tower.Count; generator++)
         {
-            if (tower.IsFlat(generator) || nestedByImage[generator])
+            if (tower.IsFlat(generator) || (nestedByImage >> generator & 1) != 0)
                 continue;
             if (!HasWitness(generator))
                 return false;
-            nestedByImage[generator] = true;
+            nestedByImage |= 1UL << generator;
         }
 
         return true;

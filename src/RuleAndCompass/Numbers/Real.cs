@@ -28,6 +28,9 @@ public abstract class Real
     /// <summary>Not below the value.</summary>
     internal double High { get; private set; }
 
+    /// <summary>For <see cref="StraightLine"/>: a stamp in the high half, a place in the low one, written at once.</summary>
+    internal long Mark { get; set; }
+
     /// <summary>An integer.</summary>
     public static implicit operator Real(int value) => new RationalReal(value);
 

@@ -6,8 +6,10 @@ namespace RuleAndCompass.Numbers;
 /// </summary>
 internal sealed class StraightLine
 {
+    private static int lastStamp;
+
     private readonly Dictionary<Rational, int> constantIndex = [];
-    private readonly Dictionary<(Operation Operation, int Left, int Right), int> operationIndex = [];
+    private readonly Dictionary<ulong, int> operationIndex = [];
     private readonly List<Instruction> instructions = [];
     private readonly Dictionary<int, Real> leaves = [];
 
@@ -23,6 +25,12 @@ internal sealed class StraightLine
     /// <summary>The leaves that <c>replace</c> kept as they are; their constants count for nothing.</summary>
     public IReadOnlyDictionary<int, Real> Leaves => leaves;
 
+    /// <summary>Whether a leaf stood in the graph.</summary>
+    public bool HasLeaves { get; private set; }
+
+    /// <summary>How many square roots there are.</summary>
+    public int Roots { get; private set; }
+
     public int Count => instructions.Count;
 
     public Instruction this[int index] => instructions[index];
@@ -33,26 +41,22 @@ internal sealed class StraightLine
     public static StraightLine? Compile(Real x, Func<Real, Real?> replace)
     {
         var line = new StraightLine();
-        var index = new Dictionary<Real, int>(ReferenceEqualityComparer.Instance);
-        var standIns = new Dictionary<Real, Real>(ReferenceEqualityComparer.Instance);
+        long stamp = (long)Interlocked.Increment(ref lastStamp) << 32;
+        Dictionary<Real, Real>? standIns = null;
         var stack = new Stack<Real>();
         stack.Push(x);
         while (stack.TryPeek(out Real? node))
         {
-            if (index.ContainsKey(node))
+            if (line.TryIndex(node, stamp, out _))
             {
                 stack.Pop();
                 continue;
             }
 
-            if (node is RationalReal rational)
-            {
-                index[node] = line.Constant(rational.Value);
-                continue;
-            }
-
             if (IsLeaf(node))
             {
+                line.HasLeaves = true;
+                standIns ??= new Dictionary<Real, Real>(ReferenceEqualityComparer.Instance);
                 if (!standIns.TryGetValue(node, out Real? standIn))
                 {
                     standIn = replace(node);
@@ -63,24 +67,24 @@ internal sealed class StraightLine
 
                 if (ReferenceEquals(standIn, node))
                 {
-                    index[node] = line.Leaf(node);
+                    node.Mark = stamp | (uint)line.Leaf(node);
                     continue;
                 }
 
-                if (!index.TryGetValue(standIn, out int at))
+                if (!line.TryIndex(standIn, stamp, out int at))
                 {
                     stack.Push(standIn);
                     continue;
                 }
 
-                index[node] = at;
+                node.Mark = stamp | (uint)at;
                 continue;
             }
 
             var operation = (OperationReal)node;
-            bool hasLeft = index.TryGetValue(operation.Left, out int left);
+            bool hasLeft = line.TryIndex(operation.Left, stamp, out int left);
             int right = left;
-            bool hasRight = operation.Right is null || index.TryGetValue(operation.Right, out right);
+            bool hasRight = operation.Right is null || line.TryIndex(operation.Right, stamp, out right);
             if (operation.Right is null)
                 right = left;
             if (!hasLeft || !hasRight)
@@ -92,11 +96,12 @@ internal sealed class StraightLine
                 continue;
             }
 
-            index[node] = line.Operate(operation.Operation, left, right);
+            node.Mark = stamp | (uint)line.Operate(operation.Operation, left, right);
         }
 
         // The last instruction is the number itself even where it merged with an earlier one.
-        line.Result = index[x];
+        line.TryIndex(x, stamp, out int result);
+        line.Result = result;
         return line;
     }
 
@@ -131,6 +136,21 @@ internal sealed class StraightLine
 
     private static bool IsLeaf(Real node) => node is QuantityReal or OperationReal { Operation: Operation.DegreesOfVector };
 
+    // A node carries the stamp of the compilation that saw it last, with its place. Should another thread write its own between, the node is
+    // compiled again and merges with what is there.
+    private bool TryIndex(Real node, long stamp, out int index)
+    {
+        if (node is RationalReal rational)
+        {
+            index = Constant(rational.Value);
+            return true;
+        }
+
+        long mark = node.Mark;
+        index = (int)mark;
+        return mark >> 32 == stamp >> 32;
+    }
+
     private int Constant(Rational value)
     {
         if (!constantIndex.TryGetValue(value, out int at))
@@ -154,11 +174,15 @@ internal sealed class StraightLine
     {
         if (operation is Operation.Add or Operation.Multiply && left > right)
             (left, right) = (right, left);
-        if (!operationIndex.TryGetValue((operation, left, right), out int at))
+        // Fewer than 2^30 instructions fit into memory.
+        ulong key = (ulong)operation << 60 | (ulong)left << 30 | (uint)right;
+        if (!operationIndex.TryGetValue(key, out int at))
         {
             at = instructions.Count;
             instructions.Add(new Instruction(false, default, operation, left, right));
-            operationIndex.Add((operation, left, right), at);
+            operationIndex.Add(key, at);
+            if (operation == Operation.Sqrt)
+                Roots++;
         }
 
         return at;

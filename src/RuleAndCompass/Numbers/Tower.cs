@@ -15,8 +15,12 @@ internal sealed class Tower(WorkLimit limit)
 {
     private const int MostGenerators = 60;
 
+    // Of 64 machine integers the recursion keeps a few hundred on the stack.
+    private const int MostSmallLevels = 6;
+
     // Integral radicands of the positive roots; null for one whose exact value was not needed so far.
     private readonly List<FieldElement?> generators = [];
+    private readonly List<double> weights = [];
     private Ball[] balls = [];
     private int ballBits;
 
@@ -37,9 +41,16 @@ internal sealed class Tower(WorkLimit limit)
     {
         if (a.IsZero || b.IsZero)
             return FieldElement.Zero;
+        if (a.IsRational)
+            return b.Scaled(a.Coefficients[0], a.Denominator);
+        if (b.IsRational)
+            return a.Scaled(b.Coefficients[0], b.Denominator);
 
         ulong all = Closed(a.Generators | b.Generators, a.Generators & b.Generators);
         int[] levels = FieldElement.Levels(all);
+        if (levels.Length <= MostSmallLevels && SmallMultiply(a, b, all, levels) is { } small)
+            return small;
+
         var product = new BigInteger[1 << levels.Length];
         MultiplyInto(product, a.Spread(all), b.Spread(all), levels.Length, all, levels);
         return FieldElement.Normal(all, product, a.Denominator * b.Denominator);
@@ -52,11 +63,21 @@ internal sealed class Tower(WorkLimit limit)
         if (a.IsRational)
             return FieldElement.Of(Rational.One / a.ToRational());
 
+        // Of the numerator alone, in integers: the product with the conjugates, and the norm.
+        (FieldElement cofactor, BigInteger norm) = Cofactor(a.Denominator.IsOne ? a : a with { Denominator = BigInteger.One });
+        return cofactor.Scaled(a.Denominator, norm);
+    }
+
+    // a × cofactor = norm, all integral.
+    private (FieldElement Cofactor, BigInteger Norm) Cofactor(FieldElement a)
+    {
+        if (a.IsRational)
+            return (FieldElement.Of(BigInteger.One), a.Coefficients[0]);
+
         (FieldElement low, FieldElement high, int top) = Split(a);
-        FieldElement radicand = RadicandOf(top);
-        FieldElement norm = Subtract(Multiply(low, low), Multiply(Multiply(high, high), radicand));
-        FieldElement inverse = Invert(norm);
-        return Multiply(Join(low, high.Negated(), top), inverse);
+        FieldElement norm = Subtract(Multiply(low, low), Multiply(Multiply(high, high), RadicandOf(top)));
+        (FieldElement rest, BigInteger last) = Cofactor(norm);
+        return (Multiply(Join(low, high.Negated(), top), rest), last);
     }
 
     /// <summary>The root that is not negative of an element that is not negative; the field grows where it has none.</summary>
@@ -339,6 +360,66 @@ internal sealed class Tower(WorkLimit limit)
         return all;
     }
 
+
+    // The product by machine integers; null where they might overflow.
+    private FieldElement? SmallMultiply(FieldElement a, FieldElement b, ulong all, int[] levels)
+    {
+        int length = 1 << levels.Length;
+        Span<long> first = stackalloc long[length];
+        Span<long> second = stackalloc long[length];
+        Span<double> weights = stackalloc double[levels.Length];
+        for (int i = 0; i < levels.Length; i++)
+        {
+            weights[i] = WeightOf(levels[i]);
+            if (double.IsPositiveInfinity(weights[i]))
+                return null;
+        }
+
+        if (!SmallProduct.TryRead(a.Spread(all), first) || !SmallProduct.TryRead(b.Spread(all), second))
+            return null;
+        if (!SmallProduct.Fits(SmallProduct.Weight(first, weights), SmallProduct.Weight(second, weights)))
+            return null;
+
+        Span<long> radicands = stackalloc long[length];
+        for (int i = 0; i < levels.Length; i++)
+        {
+            ulong lower = all & ((1UL << levels[i]) - 1);
+            SmallProduct.TryRead(RadicandOf(levels[i]).Spread(lower), radicands.Slice((1 << i) - 1, 1 << i));
+        }
+
+        Span<long> product = stackalloc long[length];
+        SmallProduct.Multiply(product, first, second, radicands);
+        return FieldElement.Normal(all, product, a.Denominator.IsOne ? b.Denominator : a.Denominator * b.Denominator);
+    }
+
+    // The weight of SmallProduct; infinite where the radicand is long or unknown.
+    private double WeightOf(int generator)
+    {
+        while (weights.Count <= generator)
+        {
+            FieldElement? radicand = generators[weights.Count];
+            if (radicand is null)
+                return double.PositiveInfinity;
+            weights.Add(NewWeight(radicand));
+        }
+
+        return weights[generator];
+    }
+
+    private double NewWeight(FieldElement radicand)
+    {
+        int[] levels = radicand.Levels();
+        if (levels.Length > MostSmallLevels)
+            return double.PositiveInfinity;
+
+        Span<long> numbers = stackalloc long[radicand.Coefficients.Length];
+        Span<double> inner = stackalloc double[levels.Length];
+        for (int i = 0; i < levels.Length; i++)
+            inner[i] = weights[levels[i]];
+        return SmallProduct.TryRead(radicand.Coefficients, numbers)
+            ? Math.Max(1, Math.Sqrt(SmallProduct.Weight(numbers, inner)) * 1.0000001)
+            : double.PositiveInfinity;
+    }
 
     private void MultiplyInto(Span<BigInteger> product, ReadOnlySpan<BigInteger> a, ReadOnlySpan<BigInteger> b, int level, ulong all, int[] levels)
     {

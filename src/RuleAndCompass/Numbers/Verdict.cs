@@ -26,7 +26,7 @@ public enum Certainty
 /// <summary>What is known of a decision.</summary>
 /// <param name="Certainty">Which of the five words.</param>
 /// <param name="Size">Bits for the certain ones, decimal digits for <see cref="Certainty.Digits"/>, else 0.</param>
-/// <param name="Givens">For the <c>…ForEvery</c> ones: the names of the givens, each with its range in words where the range is not the whole line (<c>latitude from 1° to 89°</c>).</param>
+/// <param name="Givens">For the <c>…ForEvery</c> ones: the names of the givens; <see cref="Decider.FindRanges"/> tells how far.</param>
 public sealed record Verdict(Certainty Certainty, int Size, ImmutableArray<string> Givens)
 {
     /// <summary>Proved, for the values at hand.</summary>

@@ -1,5 +1,6 @@
 using System.Globalization;
 using RuleAndCompass.Numbers;
+using RuleAndCompass.Tests.Numbers;
 
 namespace RuleAndCompass.Benchmarks.Exact;
 

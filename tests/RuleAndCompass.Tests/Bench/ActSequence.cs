@@ -74,6 +74,12 @@ internal sealed class ActSequence
         return point;
     }
 
+    public PointMark CrossAt(CurveMark first, CurveMark second, PointMark point)
+    {
+        acts.Add(new Cross(acts.Count + 1, Stage, Want, point, first, second, 0, "", default, null));
+        return point;
+    }
+
     public LineMark Slide(LineMark from, PointMark through, string? name = null)
     {
         LineMark line = new(name ?? Name("l"), from.Line.SquareThrough(through.Point), false);

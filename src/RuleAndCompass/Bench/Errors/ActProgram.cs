@@ -1,4 +1,5 @@
 using System.Diagnostics;
+using System.Runtime.Intrinsics;
 
 namespace RuleAndCompass.Bench.Errors;
 
@@ -48,6 +49,9 @@ internal sealed class ActProgram
     public double[] Nominal => nominal;
 
     public int SlotCount => stepOfSlot.Count;
+
+    /// <summary>The exact places as four trials without errors.</summary>
+    public Vector256<double>[] NominalLanes() => [.. nominal.Take(SlotCount).Select(Lanes.All)];
 
     public int StepOfSlot(int slot) => stepOfSlot[slot];
 
@@ -119,13 +123,11 @@ internal sealed class ActProgram
             }
 
             case Protract protract:
-            {
-                double turn = double.DegreesToRadians(protract.By.ToDegreesDouble());
-                return CompileTurn(act, protract.Line, protract.Base, protract.At, turn, ErrorSource.Protractor, hand.ProtractorDegrees, out slot);
-            }
+                return CompileTurn(
+                    act, protract.Line, protract.Base, protract.At, protract.By.ToDegreesDouble(), ErrorSource.Protractor, hand.ProtractorDegrees, out slot);
 
             case Slide slide:
-                return CompileTurn(act, slide.Line, slide.Base, slide.Through, Math.PI / 2, ErrorSource.Square, hand.SquareDegrees, out slot);
+                return CompileTurn(act, slide.Line, slide.Base, slide.Through, 90, ErrorSource.Square, hand.SquareDegrees, out slot);
 
             case SetOpening set:
                 return CompileSetting(set, out slot);
@@ -148,13 +150,13 @@ internal sealed class ActProgram
     }
 
     private TurnStep CompileTurn(
-        Act act, LineMark made, LineMark from, PointMark at, double turnRadians, ErrorSource tool, double sigmaDegrees, out int slot)
+        Act act, LineMark made, LineMark from, PointMark at, double turnDegrees, ErrorSource tool, double sigmaDegrees, out int slot)
     {
         int line = Slot(act, from);
         int point = Slot(act, at);
         slot = AddLine(made, point);
         int angle = AddVariables(act.Number, (tool, double.DegreesToRadians(sigmaDegrees)), (ErrorSource.Edge, hand.EdgeMillimetres));
-        return new TurnStep(act.Number, slot, line, point, turnRadians, angle);
+        return new TurnStep(act.Number, slot, line, point, turnDegrees, angle);
     }
 
     private Step CompileSetting(SetOpening set, out int slot)

@@ -52,10 +52,11 @@ internal sealed class LayStep(int act, int slot, int first, int second, int edge
 /// A line at an angle to another through a point, by protractor or square: the angle has the tool's error, in which the laying of the
 /// tool to the line is understood, and the line misses the point by one error of the edge, as every drawn line does.
 /// </summary>
-internal sealed class TurnStep(int act, int slot, int line, int point, double turnRadians, int angle) : Step(act)
+internal sealed class TurnStep(int act, int slot, int line, int point, double turnDegrees, int angle) : Step(act)
 {
-    private readonly double cosine = Math.Cos(turnRadians);
-    private readonly double sine = Math.Sin(turnRadians);
+    // Not the platform's functions, whose last digit differs from one to another.
+    private readonly double cosine = Lanes.SineCosine(Lanes.All(turnDegrees / 360)).Cosine[0];
+    private readonly double sine = Lanes.SineCosine(Lanes.All(turnDegrees / 360)).Sine[0];
 
     private int Edge => angle + 1;
 

@@ -57,7 +57,8 @@ internal sealed partial class WantMaker
         string candidates = $"they are at {Place(crossing.Points[0])} and {Place(crossing.Points[1])}";
         if (choice is null)
             throw new FaultException(MakingFindings.NeedsChoice(firstName, secondName, candidates, at));
-        bool one = Chosen(choice, crossing.Points[0], crossing.Points[1], met), other = Chosen(choice, crossing.Points[1], crossing.Points[0], met);
+        (bool one, bool other) = Decider.Recording(() =>
+            (Chosen(choice, crossing.Points[0], crossing.Points[1], met), Chosen(choice, crossing.Points[1], crossing.Points[0], met)));
         if (one == other)
             throw new FaultException(one ? MakingFindings.ChoicePicksBoth(choice.ToString()!, candidates, at) : MakingFindings.ChoicePicksNeither(choice.ToString()!, candidates, at));
         int which = one ? 0 : 1;

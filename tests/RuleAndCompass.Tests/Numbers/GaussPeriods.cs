@@ -1,6 +1,6 @@
 using RuleAndCompass.Numbers;
 
-namespace RuleAndCompass.Benchmarks.Exact;
+namespace RuleAndCompass.Tests.Numbers;
 
 /// <summary>The periods of the roots of unity of a prime 2^s + 1 with primitive root 3: cos 2π/p by square roots.</summary>
 /// <remarks>C. F. Gauss, Disquisitiones Arithmeticae (1801), arts. 343 to 365.</remarks>
