@@ -11,6 +11,9 @@ internal readonly struct Ball
 {
     private const int RadiusBits = 30;
 
+    // So that sums of exponents and shifts stay within an int.
+    private const int MostExponent = 1 << 28;
+
     public readonly BigInteger Middle;
     public readonly int Exponent;
     public readonly long Radius;
@@ -233,6 +236,9 @@ internal readonly struct Ball
     private static Ball Rounded(BigInteger middle, int exponent, BigInteger radius, int bits)
     {
         int drop = (int)Math.Max(Math.Max(0, middle.GetBitLength() - bits), radius.GetBitLength() - RadiusBits);
+        if (Math.Abs((long)exponent + drop) > MostExponent)
+            return Unknown;
+
         return drop == 0
             ? new Ball(middle, exponent, (long)radius)
             : new Ball(middle >> drop, exponent + drop, (long)(radius >> drop) + 2);

@@ -22,6 +22,7 @@ internal sealed class GenericPoint
     private const int MostProofBits = 4096;
     private const int FirstNearness = 40;
     private const int MostNearness = 640;
+    private const int RangeBits = 64;
 
     private readonly SeededBits random;
     private readonly WorkLimit limit;
@@ -49,7 +50,24 @@ internal sealed class GenericPoint
 
         public Rational Near { get; set; }
 
-        public string? Words { get; init; }
+        public string? Name => Source is { } angle ? angle.Name : (Number as GivenReal)?.Name;
+
+        public string Sign => Source is null ? "" : "°";
+
+        /// <summary>The range that the script gives, and the value in it.</summary>
+        public (Rational From, Rational To, Rational Value)? Range
+        {
+            get
+            {
+                Rational? from = Source is { } angle ? angle.From : (Number as GivenReal)?.From;
+                Rational? to = Source is { } other ? other.To : (Number as GivenReal)?.To;
+                Rational value = default;
+                bool known = Source is { } source ? source.Degrees.TryGetRational(out value) : Number is GivenReal;
+                if (Number is GivenReal given)
+                    value = given.Value;
+                return known && from is { } low && to is { } high && low <= value && value <= high ? (low, high, value) : null;
+            }
+        }
     }
 
     /// <summary>The verdict where <paramref name="x"/> vanishes identically; null where it does not, or where this cannot tell.</summary>
@@ -94,10 +112,10 @@ internal sealed class GenericPoint
 
             if (!isZero)
                 return null;
-            if (!BranchHolds(line, joint, standIns, nearness))
+            if (!BranchHolds(line, joint, Hulls(line, standIns, nearness, [], []), nearness))
                 continue;
 
-            ImmutableArray<string> names = [.. unknowns.Where(unknown => unknown.Words is not null).Select(unknown => unknown.Words!)];
+            ImmutableArray<string> names = NamesWithRanges(line, joint, standIns, nearness);
             int size = RandomBits - bounds.LogDegree;
             if (certainty > 0)
             {
@@ -122,7 +140,7 @@ internal sealed class GenericPoint
         if (leaf is not DirectionReal direction)
         {
             unknownOf[leaf] = unknowns.Count;
-            unknowns.Add(new Unknown(null, leaf) { Words = leaf is GivenReal given ? Words(given.Name, given.From, given.To, "") : null });
+            unknowns.Add(new Unknown(null, leaf));
             return;
         }
 
@@ -130,9 +148,7 @@ internal sealed class GenericPoint
         if (at < 0)
         {
             at = unknowns.Count;
-            AngleSource source = direction.Source;
-            string? words = source.Name is null ? null : Words(source.Name, source.From, source.To, "°");
-            unknowns.Add(new Unknown(source, null) { Unit = direction.Multiple.Abs(), Words = words });
+            unknowns.Add(new Unknown(direction.Source, null) { Unit = direction.Multiple.Abs() });
         }
         else
         {
@@ -141,9 +157,6 @@ internal sealed class GenericPoint
 
         unknownOf[leaf] = at;
     }
-
-    private static string Words(string name, Rational? from, Rational? to, string sign) =>
-        from is { } low && to is { } high ? $"{name} from {low}{sign} to {high}{sign}" : name;
 
     private static Rational CommonMeasure(Rational a, Rational b)
     {
@@ -239,19 +252,55 @@ internal sealed class GenericPoint
         return places;
     }
 
-    // No radicand and no divisor vanishes while the unknowns move from their values to the random ones.
-    private bool BranchHolds(StraightLine line, JointField joint, Dictionary<Real, Real> standIns, int nearness)
+    // The names of the givens, each with the part of its range for which no radicand and no divisor vanishes.
+    private ImmutableArray<string> NamesWithRanges(StraightLine line, JointField joint, Dictionary<Real, Real> standIns, int nearness)
     {
-        int bits = nearness + 128;
+        List<Unknown> ranged = [.. unknowns.Where(unknown => unknown.Name is not null && unknown.Range is not null)];
+        var check = new RangeCheck(box => BranchHolds(line, joint, Hulls(line, standIns, nearness, ranged, box), RangeBits));
+        List<(Rational From, Rational To)> whole = [.. ranged.Select(unknown => (unknown.Range!.Value.From, unknown.Range.Value.To))];
+        bool shown = true;
+        if (ranged.Count == 1)
+            whole[0] = check.Extend(ranged[0].Range!.Value.Value, whole[0].From, whole[0].To);
+        else if (ranged.Count > 1)
+            shown = check.Holds(whole);
+
+        var names = ImmutableArray.CreateBuilder<string>();
+        foreach (Unknown unknown in unknowns)
+        {
+            if (unknown.Name is not { } name)
+                continue;
+            int at = ranged.IndexOf(unknown);
+            names.Add(at < 0 ? name
+                : shown ? $"{name} from {Inward(whole[at].From, up: true)}{unknown.Sign} to {Inward(whole[at].To, up: false)}{unknown.Sign}"
+                : $"{name} near {unknown.Range!.Value.Value}{unknown.Sign}");
+        }
+
+        return names.ToImmutable();
+    }
+
+    // An end as the script has it, or one cut to three places within the range.
+    private static Rational Inward(Rational end, bool up)
+    {
+        Rational scaled = 1000 * end;
+        return scaled.IsInteger ? end : new Rational(scaled.Floor() + (up ? 1 : 0), 1000);
+    }
+
+    // Where the leaves may be: the ranged ones in the box, the others between their values and the random ones.
+    private Dictionary<int, Ball> Hulls(
+        StraightLine line,
+        Dictionary<Real, Real> standIns,
+        int nearness,
+        List<Unknown> ranged,
+        IReadOnlyList<(Rational From, Rational To)> box)
+    {
+        int bits = ranged.Count == 0 ? nearness + 128 : RangeBits;
         var hulls = new Dictionary<int, Ball>();
         foreach (Real leaf in leaves)
         {
             Rational value = ((RationalReal)standIns[leaf]).Value;
             Unknown unknown = unknowns[unknownOf[leaf]];
-            // |t − t*| ≤ 2^(2−nearness), and the point turns by at most twice that for each multiple.
-            BigInteger factor = leaf is DirectionReal direction ? 2 * BigInteger.Abs((direction.Multiple / unknown.Unit).Numerator) : 1;
-            Ball hull = Ball.Around(BigInteger.Zero, 2 - nearness, factor, bits);
-            hull = Ball.Of(value, bits).Widened(Ball.Around(factor, 2 - nearness, BigInteger.Zero, bits), bits);
+            int at = ranged.IndexOf(unknown);
+            Ball hull = at < 0 ? NearHull(leaf, unknown, value, nearness, bits) : RangeHull(leaf, box[at], bits);
             for (int i = 0; i < line.Count; i++)
             {
                 if (line[i].IsConstant && line[i].Value == value)
@@ -259,6 +308,30 @@ internal sealed class GenericPoint
             }
         }
 
+        return hulls;
+    }
+
+    // |t − t*| ≤ 2^(2−nearness), and the point turns by at most twice that for each multiple.
+    private static Ball NearHull(Real leaf, Unknown unknown, Rational value, int nearness, int bits)
+    {
+        BigInteger factor = leaf is DirectionReal direction ? 2 * BigInteger.Abs((direction.Multiple / unknown.Unit).Numerator) : 1;
+        return Ball.Of(value, bits).Widened(Ball.Around(factor, 2 - nearness, BigInteger.Zero, bits), bits);
+    }
+
+    private static Ball RangeHull(Real leaf, (Rational From, Rational To) range, int bits)
+    {
+        if (leaf is not DirectionReal direction)
+            return Ball.Hull(range.From, range.To, bits);
+
+        Ball degrees = Ball.Hull(direction.Multiple * range.From, direction.Multiple * range.To, bits);
+        (Ball cosine, Ball sine) = Elementary.OfDegrees(degrees, bits);
+        return direction.IsSine ? sine : cosine;
+    }
+
+    // No radicand and no divisor vanishes while the leaves move in their hulls.
+    private static bool BranchHolds(StraightLine line, JointField joint, Dictionary<int, Ball> hulls, int bits)
+    {
+        bits += 128;
         Ball[] balls = ProgramBalls.Evaluate(line, hulls, bits);
         for (int i = 0; i < line.Count; i++)
         {

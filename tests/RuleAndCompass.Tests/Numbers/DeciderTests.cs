@@ -140,4 +140,53 @@ public sealed class DeciderTests
         verdict.IsDecided.ShouldBeTrue();
         decider.HoldsIdentically(sum + c[0] * c[0] - 2, c, out _).ShouldBeFalse();
     }
+
+    [Fact]
+    public void A_verdict_names_the_range_for_which_nothing_vanishes()
+    {
+        Angle latitude = Angle.Given("latitude", new Rational(433, 10), 1, 89);
+        Real sine = latitude.Sine;
+
+        decider.Decide(Real.Sqrt(1 - sine * sine) - latitude.Cosine).Verdict.ToString().ShouldBe("proved for every latitude from 1° to 89°");
+
+        // Beyond a right angle the root is −cos: the identity ends there.
+        Angle wide = Angle.Given("latitude", new Rational(433, 10), -30, 150);
+        Decision decision = decider.Decide(Real.Sqrt(1 - wide.Sine * wide.Sine) - wide.Cosine);
+        decision.IsZero.ShouldBeTrue();
+        decision.Verdict.ToString().ShouldMatch("proved for every latitude from -30° to 89[.][0-9]+°");
+    }
+
+    [Fact]
+    public void Two_givens_are_certain_for_every_pair_in_their_ranges()
+    {
+        Angle a = Angle.Given("latitude", 40, 30, 50);
+        Real r = Real.Given("radius", 80, 60, 100);
+
+        Decision decision = decider.Decide(Real.Sqrt(r * r - r * r * a.Sine * a.Sine) - r * a.Cosine);
+
+        decision.IsZero.ShouldBeTrue();
+        decision.Verdict.Certainty.ShouldBe(Certainty.CertainForEvery);
+        decision.Verdict.Size.ShouldBeGreaterThanOrEqualTo(120);
+        decision.Verdict.Givens.ShouldBe(["radius from 60 to 100", "latitude from 30° to 50°"], ignoreOrder: true);
+    }
+
+    [Fact]
+    public void Numbers_of_very_many_digits_are_refused_not_awaited()
+    {
+        Real x = new Rational(3, 7);
+        for (int i = 0; i < 40; i++)
+            x = x * x + new Rational(1, 3);
+        Real y = Real.Sqrt(x) - Real.Sqrt(x + 1) + Real.One / (Real.Sqrt(x) + Real.Sqrt(x + 1));
+
+        Should.Throw<UndecidedException>(() => new Decider(new DeciderOptions(MaximumBits: 4096, TimeLimit: TimeSpan.FromSeconds(5))).Decide(y));
+    }
+
+    [Fact]
+    public void A_hidden_zero_divisor_is_told()
+    {
+        Real zero = Real.Sqrt(5 + 2 * Real.Sqrt(6)) - Real.Sqrt(2) - Real.Sqrt(3);
+
+        Should.Throw<UndecidedException>(() => decider.Decide(1 / zero)).Message.ShouldBe("a divisor is exactly 0");
+        Should.Throw<DivideByZeroException>(() => Real.One / Real.Zero);
+    }
 }
