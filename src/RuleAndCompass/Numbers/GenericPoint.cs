@@ -49,7 +49,7 @@ internal sealed class GenericPoint
 
         public Rational Near { get; set; }
 
-        public string? Words { get; init; }
+        public string? Name => Source is { } angle ? angle.Name : (Number as GivenReal)?.Name;
     }
 
     /// <summary>The verdict where <paramref name="x"/> vanishes identically; null where it does not, or where this cannot tell.</summary>
@@ -94,10 +94,10 @@ internal sealed class GenericPoint
 
             if (!isZero)
                 return null;
-            if (!BranchHolds(line, joint, standIns, nearness))
+            if (!BranchHolds(line, joint, Hulls(line, standIns, nearness), nearness))
                 continue;
 
-            ImmutableArray<string> names = [.. unknowns.Where(unknown => unknown.Words is not null).Select(unknown => unknown.Words!)];
+            ImmutableArray<string> names = [.. unknowns.Select(unknown => unknown.Name).OfType<string>()];
             int size = RandomBits - bounds.LogDegree;
             if (certainty > 0)
             {
@@ -122,7 +122,7 @@ internal sealed class GenericPoint
         if (leaf is not DirectionReal direction)
         {
             unknownOf[leaf] = unknowns.Count;
-            unknowns.Add(new Unknown(null, leaf) { Words = leaf is GivenReal given ? given.Name : null });
+            unknowns.Add(new Unknown(null, leaf));
             return;
         }
 
@@ -130,8 +130,7 @@ internal sealed class GenericPoint
         if (at < 0)
         {
             at = unknowns.Count;
-            AngleSource source = direction.Source;
-                        unknowns.Add(new Unknown(source, null) { Unit = direction.Multiple.Abs(), Words = source.Name });
+            unknowns.Add(new Unknown(direction.Source, null) { Unit = direction.Multiple.Abs() });
         }
         else
         {
@@ -235,19 +234,15 @@ internal sealed class GenericPoint
         return places;
     }
 
-    // No radicand and no divisor vanishes while the unknowns move from their values to the random ones.
-    private bool BranchHolds(StraightLine line, JointField joint, Dictionary<Real, Real> standIns, int nearness)
+    // Where the leaves may be: between their values and the random ones.
+    private Dictionary<int, Ball> Hulls(StraightLine line, Dictionary<Real, Real> standIns, int nearness)
     {
         int bits = nearness + 128;
         var hulls = new Dictionary<int, Ball>();
         foreach (Real leaf in leaves)
         {
             Rational value = ((RationalReal)standIns[leaf]).Value;
-            Unknown unknown = unknowns[unknownOf[leaf]];
-            // |t − t*| ≤ 2^(2−nearness), and the point turns by at most twice that for each multiple.
-            BigInteger factor = leaf is DirectionReal direction ? 2 * BigInteger.Abs((direction.Multiple / unknown.Unit).Numerator) : 1;
-            Ball hull = Ball.Around(BigInteger.Zero, 2 - nearness, factor, bits);
-            hull = Ball.Of(value, bits).Widened(Ball.Around(factor, 2 - nearness, BigInteger.Zero, bits), bits);
+            Ball hull = NearHull(leaf, unknowns[unknownOf[leaf]], value, nearness, bits);
             for (int i = 0; i < line.Count; i++)
             {
                 if (line[i].IsConstant && line[i].Value == value)
@@ -255,6 +250,20 @@ internal sealed class GenericPoint
             }
         }
 
+        return hulls;
+    }
+
+    // |t − t*| ≤ 2^(2−nearness), and the point turns by at most twice that for each multiple.
+    private static Ball NearHull(Real leaf, Unknown unknown, Rational value, int nearness, int bits)
+    {
+        BigInteger factor = leaf is DirectionReal direction ? 2 * BigInteger.Abs((direction.Multiple / unknown.Unit).Numerator) : 1;
+        return Ball.Of(value, bits).Widened(Ball.Around(factor, 2 - nearness, BigInteger.Zero, bits), bits);
+    }
+
+    // No radicand and no divisor vanishes while the leaves move in their hulls.
+    private static bool BranchHolds(StraightLine line, JointField joint, Dictionary<int, Ball> hulls, int bits)
+    {
+        bits += 128;
         Ball[] balls = ProgramBalls.Evaluate(line, hulls, bits);
         for (int i = 0; i < line.Count; i++)
         {

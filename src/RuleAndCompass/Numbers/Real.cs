@@ -7,6 +7,8 @@ namespace RuleAndCompass.Numbers;
 /// </remarks>
 public abstract class Real
 {
+    private const long MostFoldedBits = 200_000;
+
     private protected Real(Interval enclosure)
     {
         Low = enclosure.Low;
@@ -43,7 +45,7 @@ public abstract class Real
         if (a is RationalReal p)
         {
             if (b is RationalReal q)
-                return new RationalReal(p.Value + q.Value);
+                return Folded(Operation.Add, a, b, p.Value, q.Value);
             if (p.Value.IsZero)
                 return b;
         }
@@ -61,7 +63,7 @@ public abstract class Real
         if (b is RationalReal q)
         {
             if (a is RationalReal p)
-                return new RationalReal(p.Value - q.Value);
+                return Folded(Operation.Subtract, a, b, p.Value, q.Value);
             if (q.Value.IsZero)
                 return a;
         }
@@ -75,7 +77,7 @@ public abstract class Real
         if (a is RationalReal p)
         {
             if (b is RationalReal q)
-                return new RationalReal(p.Value * q.Value);
+                return Folded(Operation.Multiply, a, b, p.Value, q.Value);
             if (p.Value.IsZero)
                 return a;
             if (p.Value == Rational.One)
@@ -99,7 +101,7 @@ public abstract class Real
         if (b is RationalReal q)
         {
             if (a is RationalReal p)
-                return new RationalReal(p.Value / q.Value);
+                return Folded(Operation.Divide, a, b, p.Value, q.Value);
             if (q.Value.IsZero)
                 throw new DivideByZeroException("The divisor is 0.");
             if (q.Value == Rational.One)
@@ -150,6 +152,29 @@ public abstract class Real
             return Low;
 
         return Enclosures.ToDouble(this);
+    }
+
+    // Rational arithmetic folds at once, unless the result had more than 60,000 digits or so.
+    private static Real Folded(Operation operation, Real a, Real b, Rational p, Rational q)
+    {
+        if (p.Bits + q.Bits <= MostFoldedBits)
+        {
+            return new RationalReal(operation switch
+            {
+                Operation.Add => p + q,
+                Operation.Subtract => p - q,
+                Operation.Multiply => p * q,
+                _ => p / q,
+            });
+        }
+
+        return new OperationReal(operation, a, b, operation switch
+        {
+            Operation.Add => Interval.Add(a, b),
+            Operation.Subtract => Interval.Subtract(a, b),
+            Operation.Multiply => Interval.Multiply(a, b),
+            _ => q.IsZero ? throw new DivideByZeroException("The divisor is 0.") : Interval.Divide(a, b),
+        });
     }
 
     /// <summary>Keeps the tighter bounds.</summary>
