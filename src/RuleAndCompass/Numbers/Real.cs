@@ -145,9 +145,20 @@ public abstract class Real
         return this is RationalReal;
     }
 
+    /// <summary>A double good to nine places at least, from the enclosure at hand where that will do: for sorting and choosing, never for deciding.</summary>
+    internal double Near()
+    {
+        double middle = Low + ((High - Low) / 2);
+        return High - Low <= 1e-9 * Math.Max(1, Math.Abs(middle)) ? middle : ToDouble();
+    }
+
     /// <summary>Within one unit in the last place of the true value.</summary>
     public double ToDouble()
     {
+        if (this is RationalReal rational)
+            return rational.Value.ToDouble();
+        if (this is GivenReal given)
+            return given.Value.ToDouble();
         if (Low == High || High <= Math.BitIncrement(Low))
             return Low;
 

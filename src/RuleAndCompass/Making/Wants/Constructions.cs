@@ -60,7 +60,7 @@ internal sealed partial class Constructions(Workbench bench, Sheet room)
         if (crossing.Points.Length < 2)
             return "";
         Point here = crossing.Points[which], other = crossing.Points[1 - which];
-        double dx = here.XMillimetres - other.XMillimetres, dy = here.YMillimetres - other.YMillimetres;
+        double dx = here.X.Near() - other.X.Near(), dy = here.Y.Near() - other.Y.Near();
         return Math.Abs(dy) >= Math.Abs(dx) ? (dy > 0 ? ", the upper one" : ", the lower one") : dx > 0 ? ", the one on the right" : ", the one on the left";
     }
 
@@ -94,7 +94,7 @@ internal sealed partial class Constructions(Workbench bench, Sheet room)
 
     private static double Apart(Point a, Point b)
     {
-        double dx = a.XMillimetres - b.XMillimetres, dy = a.YMillimetres - b.YMillimetres;
+        double dx = a.X.Near() - b.X.Near(), dy = a.Y.Near() - b.Y.Near();
         return (dx * dx) + (dy * dy);
     }
 
