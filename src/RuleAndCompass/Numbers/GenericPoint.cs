@@ -82,7 +82,7 @@ internal sealed class GenericPoint
 
             StraightLine line = StraightLine.Compile(x, leaf => standIns[leaf])!;
             limit.Check();
-            Bounds bounds = Bounds.Of(line, IndexOf(line, standIns), unknowns.Count);
+            Bounds bounds = Bounds.Of(line, IndexOf(line, standIns));
             if (bounds.LogDegree > RandomBits - LeastCertainty)
                 return null;
 
@@ -112,7 +112,7 @@ internal sealed class GenericPoint
 
             if (!isZero)
                 return null;
-            if (!BranchHolds(line, joint, Hulls(line, standIns, nearness, [], []), nearness))
+            if (!BranchHolds(line, joint, NearHulls(line, standIns, nearness), nearness))
                 continue;
 
             ImmutableArray<string> names = NamesWithRanges(line, joint, standIns, nearness);
@@ -237,16 +237,11 @@ internal sealed class GenericPoint
     private Dictionary<int, (int Unknown, int Degree)> IndexOf(StraightLine line, Dictionary<Real, Real> standIns)
     {
         var places = new Dictionary<int, (int, int)>();
-        foreach (Real leaf in leaves)
+        foreach ((int at, Real leaf) in PlacesOf(line, standIns))
         {
-            Rational value = ((RationalReal)standIns[leaf]).Value;
-            Unknown unknown = unknowns[unknownOf[leaf]];
-            int degree = leaf is DirectionReal direction ? 2 * (int)BigInteger.Abs((direction.Multiple / unknown.Unit).Numerator) : -1;
-            for (int i = 0; i < line.Count; i++)
-            {
-                if (line[i].IsConstant && line[i].Value == value)
-                    places[i] = (unknownOf[leaf], degree);
-            }
+            Rational unit = unknowns[unknownOf[leaf]].Unit;
+            int degree = leaf is DirectionReal direction ? 2 * (int)BigInteger.Abs((direction.Multiple / unit).Numerator) : -1;
+            places[at] = (unknownOf[leaf], degree);
         }
 
         return places;
@@ -256,7 +251,33 @@ internal sealed class GenericPoint
     private ImmutableArray<string> NamesWithRanges(StraightLine line, JointField joint, Dictionary<Real, Real> standIns, int nearness)
     {
         List<Unknown> ranged = [.. unknowns.Where(unknown => unknown.Name is not null && unknown.Range is not null)];
-        var check = new RangeCheck(box => BranchHolds(line, joint, Hulls(line, standIns, nearness, ranged, box), RangeBits));
+        var intervals = new Interval[line.Count];
+        List<(int At, Real Leaf, int Range)> moving = Rest(line, standIns, nearness, ranged, intervals);
+        var check = new RangeCheck(box =>
+        {
+            // Cosine and sine of one angle come together.
+            (Rational Multiple, int Range) last = (Rational.Zero, -1);
+            (Ball Cosine, Ball Sine) pair = default;
+            foreach ((int at, Real leaf, int range) in moving)
+            {
+                (Rational from, Rational to) = box[range];
+                if (leaf is not DirectionReal direction)
+                {
+                    intervals[at] = Interval.Of(Ball.Hull(from, to, RangeBits));
+                    continue;
+                }
+
+                if (last != (direction.Multiple, range))
+                {
+                    last = (direction.Multiple, range);
+                    pair = Elementary.OfDegrees(Ball.Hull(direction.Multiple * from, direction.Multiple * to, RangeBits), RangeBits);
+                }
+
+                intervals[at] = Interval.Of(direction.IsSine ? pair.Sine : pair.Cosine);
+            }
+
+            return BranchHolds(line, joint, intervals);
+        });
         List<(Rational From, Rational To)> whole = [.. ranged.Select(unknown => (unknown.Range!.Value.From, unknown.Range.Value.To))];
         bool shown = true;
         if (ranged.Count == 1)
@@ -285,30 +306,54 @@ internal sealed class GenericPoint
         return scaled.IsInteger ? end : new Rational(scaled.Floor() + (up ? 1 : 0), 1000);
     }
 
-    // Where the leaves may be: the ranged ones in the box, the others between their values and the random ones.
-    private Dictionary<int, Ball> Hulls(
+    // Fills in what stays where it is, and tells the places of the leaves that move through ranges.
+    private List<(int At, Real Leaf, int Range)> Rest(
         StraightLine line,
         Dictionary<Real, Real> standIns,
         int nearness,
         List<Unknown> ranged,
-        IReadOnlyList<(Rational From, Rational To)> box)
+        Interval[] intervals)
     {
-        int bits = ranged.Count == 0 ? nearness + 128 : RangeBits;
+        for (int i = 0; i < line.Count; i++)
+        {
+            if (line[i].IsConstant)
+                intervals[i] = Interval.Of(line[i].Value);
+        }
+
+        var moving = new List<(int At, Real Leaf, int Range)>();
+        foreach ((int at, Real leaf) in PlacesOf(line, standIns))
+        {
+            Unknown unknown = unknowns[unknownOf[leaf]];
+            int range = ranged.IndexOf(unknown);
+            if (range >= 0)
+                moving.Add((at, leaf, range));
+            else
+                intervals[at] = Interval.Of(NearHull(leaf, unknown, line[at].Value, nearness, RangeBits));
+        }
+
+        return moving;
+    }
+
+    // Between the values of the leaves and the random ones.
+    private Dictionary<int, Ball> NearHulls(StraightLine line, Dictionary<Real, Real> standIns, int nearness)
+    {
         var hulls = new Dictionary<int, Ball>();
+        foreach ((int at, Real leaf) in PlacesOf(line, standIns))
+            hulls[at] = NearHull(leaf, unknowns[unknownOf[leaf]], line[at].Value, nearness, nearness + 128);
+        return hulls;
+    }
+
+    private IEnumerable<(int At, Real Leaf)> PlacesOf(StraightLine line, Dictionary<Real, Real> standIns)
+    {
         foreach (Real leaf in leaves)
         {
             Rational value = ((RationalReal)standIns[leaf]).Value;
-            Unknown unknown = unknowns[unknownOf[leaf]];
-            int at = ranged.IndexOf(unknown);
-            Ball hull = at < 0 ? NearHull(leaf, unknown, value, nearness, bits) : RangeHull(leaf, box[at], bits);
             for (int i = 0; i < line.Count; i++)
             {
                 if (line[i].IsConstant && line[i].Value == value)
-                    hulls[i] = hull;
+                    yield return (i, leaf);
             }
         }
-
-        return hulls;
     }
 
     // |t − t*| ≤ 2^(2−nearness), and the point turns by at most twice that for each multiple.
@@ -318,14 +363,25 @@ internal sealed class GenericPoint
         return Ball.Of(value, bits).Widened(Ball.Around(factor, 2 - nearness, BigInteger.Zero, bits), bits);
     }
 
-    private static Ball RangeHull(Real leaf, (Rational From, Rational To) range, int bits)
+    // The same in doubles, for the many boxes of a range; constants are filled in.
+    private static bool BranchHolds(StraightLine line, JointField joint, Interval[] intervals)
     {
-        if (leaf is not DirectionReal direction)
-            return Ball.Hull(range.From, range.To, bits);
+        for (int i = 0; i < line.Count; i++)
+        {
+            StraightLine.Instruction step = line[i];
+            if (step.IsConstant)
+                continue;
 
-        Ball degrees = Ball.Hull(direction.Multiple * range.From, direction.Multiple * range.To, bits);
-        (Ball cosine, Ball sine) = Elementary.OfDegrees(degrees, bits);
-        return direction.IsSine ? sine : cosine;
+            Interval left = intervals[step.Left];
+            Interval right = intervals[step.Right];
+            if (step.Operation == Operation.Divide && right.Low <= 0 && right.High >= 0)
+                return false;
+            if (step.Operation == Operation.Sqrt && left.Low <= 0 && !joint.IsKnownZero(step.Left))
+                return false;
+            intervals[i] = Interval.Apply(step.Operation, left, right);
+        }
+
+        return true;
     }
 
     // No radicand and no divisor vanishes while the leaves move in their hulls.
