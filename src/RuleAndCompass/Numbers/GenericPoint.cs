@@ -64,7 +64,7 @@ internal sealed class GenericPoint
 
             StraightLine line = StraightLine.Compile(x, leaf => standIns[leaf])!;
             limit.Check();
-            Bounds bounds = Bounds.Of(line, IndexOf(line, standIns), unknowns.Count);
+            Bounds bounds = Bounds.Of(line, IndexOf(line, standIns));
             if (bounds.LogDegree > RandomBits - LeastCertainty)
                 return null;
 
@@ -94,7 +94,7 @@ internal sealed class GenericPoint
 
             if (!isZero)
                 return null;
-            if (!BranchHolds(line, joint, Hulls(line, standIns, nearness), nearness))
+            if (!BranchHolds(line, joint, NearHulls(line, standIns, nearness), nearness))
                 continue;
 
             ImmutableArray<string> names = [.. unknowns.Select(unknown => unknown.Name).OfType<string>()];
@@ -219,38 +219,36 @@ internal sealed class GenericPoint
     private Dictionary<int, (int Unknown, int Degree)> IndexOf(StraightLine line, Dictionary<Real, Real> standIns)
     {
         var places = new Dictionary<int, (int, int)>();
-        foreach (Real leaf in leaves)
+        foreach ((int at, Real leaf) in PlacesOf(line, standIns))
         {
-            Rational value = ((RationalReal)standIns[leaf]).Value;
-            Unknown unknown = unknowns[unknownOf[leaf]];
-            int degree = leaf is DirectionReal direction ? 2 * (int)BigInteger.Abs((direction.Multiple / unknown.Unit).Numerator) : -1;
-            for (int i = 0; i < line.Count; i++)
-            {
-                if (line[i].IsConstant && line[i].Value == value)
-                    places[i] = (unknownOf[leaf], degree);
-            }
+            Rational unit = unknowns[unknownOf[leaf]].Unit;
+            int degree = leaf is DirectionReal direction ? 2 * (int)BigInteger.Abs((direction.Multiple / unit).Numerator) : -1;
+            places[at] = (unknownOf[leaf], degree);
         }
 
         return places;
     }
 
     // Where the leaves may be: between their values and the random ones.
-    private Dictionary<int, Ball> Hulls(StraightLine line, Dictionary<Real, Real> standIns, int nearness)
+    private Dictionary<int, Ball> NearHulls(StraightLine line, Dictionary<Real, Real> standIns, int nearness)
     {
-        int bits = nearness + 128;
         var hulls = new Dictionary<int, Ball>();
+        foreach ((int at, Real leaf) in PlacesOf(line, standIns))
+            hulls[at] = NearHull(leaf, unknowns[unknownOf[leaf]], line[at].Value, nearness, nearness + 128);
+        return hulls;
+    }
+
+    private IEnumerable<(int At, Real Leaf)> PlacesOf(StraightLine line, Dictionary<Real, Real> standIns)
+    {
         foreach (Real leaf in leaves)
         {
             Rational value = ((RationalReal)standIns[leaf]).Value;
-            Ball hull = NearHull(leaf, unknowns[unknownOf[leaf]], value, nearness, bits);
             for (int i = 0; i < line.Count; i++)
             {
                 if (line[i].IsConstant && line[i].Value == value)
-                    hulls[i] = hull;
+                    yield return (i, leaf);
             }
         }
-
-        return hulls;
     }
 
     // |t − t*| ≤ 2^(2−nearness), and the point turns by at most twice that for each multiple.

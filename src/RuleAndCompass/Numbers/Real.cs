@@ -30,6 +30,8 @@ public abstract class Real
     /// <summary>Not below the value.</summary>
     internal double High { get; private set; }
 
+    private Interval Enclosure => new(Low, High);
+
     /// <summary>For <see cref="StraightLine"/>: a stamp in the high half, a place in the low one, written at once.</summary>
     internal long Mark { get; set; }
 
@@ -54,7 +56,7 @@ public abstract class Real
             return a;
         }
 
-        return new OperationReal(Operation.Add, a, b, Interval.Add(a, b));
+        return new OperationReal(Operation.Add, a, b, Interval.Add(a.Enclosure, b.Enclosure));
     }
 
     /// <summary>The difference.</summary>
@@ -68,7 +70,7 @@ public abstract class Real
                 return a;
         }
 
-        return ReferenceEquals(a, b) ? Zero : new OperationReal(Operation.Subtract, a, b, Interval.Subtract(a, b));
+        return ReferenceEquals(a, b) ? Zero : new OperationReal(Operation.Subtract, a, b, Interval.Subtract(a.Enclosure, b.Enclosure));
     }
 
     /// <summary>The product.</summary>
@@ -91,7 +93,7 @@ public abstract class Real
                 return a;
         }
 
-        return new OperationReal(Operation.Multiply, a, b, Interval.Multiply(a, b));
+        return new OperationReal(Operation.Multiply, a, b, Interval.Multiply(a.Enclosure, b.Enclosure));
     }
 
     /// <summary>The quotient. The caller has decided that <paramref name="b"/> is not zero.</summary>
@@ -112,13 +114,13 @@ public abstract class Real
             return a;
         }
 
-        return ReferenceEquals(a, b) ? One : new OperationReal(Operation.Divide, a, b, Interval.Divide(a, b));
+        return ReferenceEquals(a, b) ? One : new OperationReal(Operation.Divide, a, b, Interval.Divide(a.Enclosure, b.Enclosure));
     }
 
     /// <summary>The number with the other sign.</summary>
     public static Real operator -(Real a) => a is RationalReal p
         ? new RationalReal(-p.Value)
-        : new OperationReal(Operation.Subtract, Zero, a, Interval.Subtract(Zero, a));
+        : new OperationReal(Operation.Subtract, Zero, a, Interval.Subtract(Zero.Enclosure, a.Enclosure));
 
     /// <summary>The root that is not negative. The caller has decided that <paramref name="radicand"/> is not negative.</summary>
     /// <exception cref="ArgumentException"><paramref name="radicand"/> is a negative rational.</exception>
@@ -132,7 +134,7 @@ public abstract class Real
                 return new RationalReal(new Rational(numerator, denominator));
         }
 
-        return new OperationReal(Operation.Sqrt, radicand, null, Interval.Sqrt(radicand));
+        return new OperationReal(Operation.Sqrt, radicand, null, Interval.Sqrt(radicand.Enclosure));
     }
 
     /// <summary>A number or length given in the script: its value is known exactly; identities are sought for every value of it.</summary>
@@ -181,10 +183,10 @@ public abstract class Real
 
         return new OperationReal(operation, a, b, operation switch
         {
-            Operation.Add => Interval.Add(a, b),
-            Operation.Subtract => Interval.Subtract(a, b),
-            Operation.Multiply => Interval.Multiply(a, b),
-            _ => q.IsZero ? throw new DivideByZeroException("The divisor is 0.") : Interval.Divide(a, b),
+            Operation.Add => Interval.Add(a.Enclosure, b.Enclosure),
+            Operation.Subtract => Interval.Subtract(a.Enclosure, b.Enclosure),
+            Operation.Multiply => Interval.Multiply(a.Enclosure, b.Enclosure),
+            _ => q.IsZero ? throw new DivideByZeroException("The divisor is 0.") : Interval.Divide(a.Enclosure, b.Enclosure),
         });
     }
 
