@@ -27,6 +27,9 @@ internal sealed class FullSizeComposer
     private const double SpanRowHeight = 8;
     private const double NameGap = 1.4;
 
+    // A name stands near its mark and on nothing, or not at all: what is pricked through must not be covered.
+    private const int NearPlaces = 24;
+
     private static readonly double titleSize = Face.SizeForCapitals(TitleHeight);
     private static readonly double wordSize = Face.SizeForCapitals(WordHeight);
     private static readonly double nameSize = Face.SizeForCapitals(NameHeight);
@@ -114,10 +117,9 @@ internal sealed class FullSizeComposer
             {
                 string shown = Typesetting.Fit(name, Typeface.Text, nameSize, 60);
                 (double width, double height) = Canvas.LabelSize(shown, Typeface.Text, nameSize);
-                PlacedLabel label = placement.Place(LabelPlacement.Around(at, width, height, NameGap), always, dropsUnreadable: true);
-                if (!label.IsUnreadable && (isOwn || !label.IsCrowded))
+                PlacedLabel label = placement.Place(LabelPlacement.Around(at, width, height, NameGap).Take(NearPlaces), always, placed => !placed.IsCrowded);
+                if (!label.IsCrowded)
                 {
-                    canvas.Tie(Role.Name, label, CrossClear, Pens.Thin);
                     canvas.Label(Role.Name, shown, label.Box, Typeface.Text, nameSize, Ink.Black);
                 }
                 else if (isOwn && !leavesNamesOut)

@@ -577,9 +577,9 @@ internal sealed class StepDrawing
         }
 
         // A curve whose name would lie on another is told by its act's number; a point keeps its name.
-        bool isCurve = trace is not PointTrace;
-        PlacedLabel label = placement.Place(places, plates, dropsUnreadable: isCurve);
-        if (!isCurve || !label.IsUnreadable)
+        bool IsTaken(PlacedLabel placed) => trace is PointTrace || !placed.IsUnreadable;
+        PlacedLabel label = placement.Place(places, plates, IsTaken);
+        if (IsTaken(label))
         {
             names.Add(trace.Mark, (text, label));
         }
