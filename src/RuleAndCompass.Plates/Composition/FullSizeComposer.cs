@@ -304,7 +304,7 @@ internal sealed class FullSizeComposer
 
     private List<string> WordLines(double measure, bool isSheet, bool leavesNamesOut)
     {
-        string size = StepPlateComposer.SheetText(layout.Sheet);
+        string size = TitleBlock.SheetText(layout.Sheet);
         List<string> words =
         [
             $"Full size, 1 : 1. Sheet {size}" + (isSheet ? "; the edge of this page is its edge." : "; its edge is drawn."),

@@ -27,7 +27,7 @@ internal sealed class StepDrawing
     private readonly Tracing tracing;
     private readonly View view;
     private readonly IReadOnlyList<PlatePlan> plans;
-    private readonly Dictionary<Point, int> actOfPoint;
+    private readonly Dictionary<Point, int> actOfPoint = new(ReferenceEqualityComparer.Instance);
     private readonly CancellationToken cancellation;
     private readonly LabelPlacement placement;
     private readonly Dictionary<Mark, (string Text, PlacedLabel Label)> names = new(ReferenceEqualityComparer.Instance);
@@ -37,14 +37,12 @@ internal sealed class StepDrawing
     private readonly Outline[][] strokes;
     private readonly List<(int From, Item Item)> keptWork = [];
 
-    public StepDrawing(
-        Layout layout, Tracing tracing, View view, IReadOnlyList<PlatePlan> plans, Dictionary<Point, int> actOfPoint, CancellationToken cancellation)
+    public StepDrawing(Layout layout, Tracing tracing, View view, IReadOnlyList<PlatePlan> plans, CancellationToken cancellation)
     {
         this.layout = layout;
         this.tracing = tracing;
         this.view = view;
         this.plans = plans;
-        this.actOfPoint = actOfPoint;
         this.cancellation = cancellation;
         placement = new(view.Window);
         plateOfAct = new int[layout.Acts.Length + 1];
@@ -54,6 +52,14 @@ internal sealed class StepDrawing
             for (int i = plan.First; i < plan.End; i++)
             {
                 plateOfAct[layout.Acts[i].Number] = plan.Index;
+            }
+        }
+
+        foreach (Trace trace in tracing.Traces)
+        {
+            if (trace is PointTrace point)
+            {
+                actOfPoint.TryAdd(point.Point.Point, trace.Act);
             }
         }
 
