@@ -105,7 +105,10 @@ internal sealed class FullSizeComposer
         }
 
         // Bars and words first, since a name finds room more easily.
-        if (isSheet ? !InFreeRoom(canvas, placement, pageBox, leavesNamesOut) : !BesideSheet(canvas, placement, pageBox, view.OnPage(tracing.Sheet), leavesNamesOut))
+        bool hasRoom = isSheet
+            ? InFreeRoom(canvas, placement, pageBox, leavesNamesOut)
+            : BesideSheet(canvas, placement, pageBox, view.OnPage(tracing.Sheet), leavesNamesOut);
+        if (!hasRoom)
         {
             return null;
         }
@@ -255,7 +258,9 @@ internal sealed class FullSizeComposer
         List<string> lines = WordLines(90, isSheet: true, leavesNamesOut);
         List<string> title = TitleLines(90);
         double wordsHeight = (title.Count * 5.5) + 2 + (lines.Count * 4);
-        double wordsWidth = Math.Max(lines.Max(line => Typesetting.Width(line, Typeface.Text, wordSize)), title.Max(line => Typesetting.Width(line, Typeface.Strong, titleSize)));
+        double wordsWidth = Math.Max(
+            lines.Max(line => Typesetting.Width(line, Typeface.Text, wordSize)),
+            title.Max(line => Typesetting.Width(line, Typeface.Strong, titleSize)));
         if (FreeRoom(placement, page, wordsWidth + 4, wordsHeight + 4) is not { } words)
         {
             return false;
@@ -327,7 +332,9 @@ internal sealed class FullSizeComposer
     private List<string> TitleLines(double measure)
     {
         List<string> lines = Typesetting.Break(layout.Title, Typeface.Strong, titleSize, measure);
-        return lines.Count <= 2 ? [.. lines.DefaultIfEmpty("")] : [lines[0], Typesetting.Fit(string.Join(' ', lines.Skip(1)), Typeface.Strong, titleSize, measure)];
+        return lines.Count <= 2
+            ? [.. lines.DefaultIfEmpty("")]
+            : [lines[0], Typesetting.Fit(string.Join(' ', lines.Skip(1)), Typeface.Strong, titleSize, measure)];
     }
 
     private static void Write(Canvas canvas, List<string> title, List<string> lines, Spot at)
