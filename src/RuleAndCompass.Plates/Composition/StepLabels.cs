@@ -1,6 +1,5 @@
 using System.Globalization;
 using RuleAndCompass.Bench;
-using RuleAndCompass.Making;
 using RuleAndCompass.Plates.Scene;
 
 namespace RuleAndCompass.Plates.Composition;
