@@ -12,7 +12,8 @@ namespace RuleAndCompass.Making.Wants;
 /// </summary>
 /// <param name="bench">Where the acts are done.</param>
 /// <param name="room">How far the stock or the board reaches.</param>
-internal sealed partial class Constructions(Workbench bench, Sheet room)
+/// <param name="sheet">The stock, by whose size openings and bases are chosen.</param>
+internal sealed partial class Constructions(Workbench bench, Sheet room, Sheet sheet)
 {
     private Kit Kit => bench.Kit;
 
@@ -21,7 +22,7 @@ internal sealed partial class Constructions(Workbench bench, Sheet room)
     /// <summary>The sentence at hand, for findings.</summary>
     public SourceSpan Serving { get; set; }
 
-    private double Diagonal => Math.Sqrt(Math.Pow(room.Width.ToDouble(), 2) + Math.Pow(room.Height.ToDouble(), 2));
+    private double Diagonal => Math.Sqrt(Math.Pow(sheet.Width.ToDouble(), 2) + Math.Pow(sheet.Height.ToDouble(), 2));
 
     /// <summary>A whole number of millimetres near the one that suits, and within the dividers' reach.</summary>
     private FreeOpening Free(double suitsMillimetres, double leastMillimetres = 1)
