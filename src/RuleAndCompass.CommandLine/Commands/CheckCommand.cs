@@ -97,7 +97,7 @@ internal static class CheckCommand
             return;
         }
 
-        foreach (string list in (string[])["comparisons", "claims"])
+        foreach (string list in (string[])["comparisons", "claims", "ranges"])
         {
             json.WriteStartArray(list);
             json.WriteEndArray();

@@ -1,3 +1,4 @@
+using System.Globalization;
 using System.Text.Json;
 using RuleAndCompass.Accuracy;
 using RuleAndCompass.Comparing;
@@ -23,6 +24,17 @@ internal static class ReportJson
             json.WriteString("says", claim.Says);
             json.WriteString("verdict", ClaimRow.VerdictOf(claim));
             WriteNullable(json, "by", claim.By);
+            json.WriteEndObject();
+        }
+
+        json.WriteEndArray();
+        json.WriteStartArray("ranges");
+        foreach (ValidFor range in layout.ValidRanges)
+        {
+            json.WriteStartObject();
+            json.WriteString("given", range.Given);
+            WriteNullable(json, "from", range.From?.ToString(CultureInfo.InvariantCulture));
+            WriteNullable(json, "to", range.To?.ToString(CultureInfo.InvariantCulture));
             json.WriteEndObject();
         }
 

@@ -17,6 +17,7 @@ namespace RuleAndCompass.Comparing;
 /// <param name="Claims">In the script's order.</param>
 /// <param name="HandSummary">The whole layout's hand error in a sentence or two, where it was worked out.</param>
 /// <param name="Blame">The acts that spoil most, worst first; empty where no hand error was worked out.</param>
+/// <param name="Ranges">Over which values of the givens the decisions hold.</param>
 /// <param name="Warnings">What the bench makes difficult.</param>
 /// <param name="Counts">Acts, and operations by geometrography.</param>
 /// <param name="Cautions">What a maker should take care of.</param>
@@ -27,6 +28,7 @@ public sealed record DeviationReport(
     ImmutableArray<string> Notes,
     ImmutableArray<ComparisonRow> Comparisons,
     ImmutableArray<ClaimRow> Claims,
+    ImmutableArray<string> Ranges,
     ImmutableArray<string> HandSummary,
     ImmutableArray<string> Blame,
     ImmutableArray<string> Warnings,
@@ -51,6 +53,7 @@ public sealed record DeviationReport(
             layout.Notes,
             [.. layout.Comparisons.Select((comparison, index) => ComparisonRow.Of(comparison, layout.Decider, options, HandOf(options.Hand, index)))],
             [.. layout.Claims.Select(ClaimRow.Of)],
+            [.. RangeSentences(layout)],
             [.. HandSentences(options.Hand)],
             [.. BlameSentences(options.Hand)],
             [.. options.Warnings.Select(Sentence)],
@@ -70,6 +73,20 @@ public sealed record DeviationReport(
             yield return new("Board", BenchText.Of(board));
         yield return new("Kit", BenchText.Of(layout.Kit));
         yield return new("Hand", BenchText.Of(layout.Hand));
+    }
+
+    // What "for every latitude" reaches, once for the whole script.
+    private static IEnumerable<string> RangeSentences(Layout layout)
+    {
+        if (layout.Comparisons.All(row => row.Decision.Verdict.Givens.IsEmpty) && layout.Claims.All(row => row.Verdict.Givens.IsEmpty))
+            yield break;
+        foreach (ValidFor range in layout.ValidRanges)
+        {
+            string unit = range.IsAngle ? "°" : " mm";
+            yield return range is { From: { } from, To: { } to }
+                ? string.Create(CultureInfo.InvariantCulture, $"\"For every {range.Given}\" is shown from {from:0.####}{unit} to {to:0.####}{unit}: over these every choice stays as it is.")
+                : $"\"For every {range.Given}\" is shown for values near the one used; a range in its `given` (from … to …) asks how far it reaches.";
+        }
     }
 
     private static HandResult? HandOf(HandErrorReport? hand, int comparison) =>

@@ -20,6 +20,7 @@ public static class DeviationText
             Paragraphs(text, "Notes", report.Notes);
         Comparisons(text, report.Comparisons);
         Claims(text, report.Claims);
+        Paragraphs(text, "How far it reaches", report.Ranges);
         Paragraphs(text, "By hand", report.HandSummary);
         Lines(text, "What spoils it most", report.Blame);
         Paragraphs(text, "At the bench", report.Warnings);

@@ -26,6 +26,7 @@ internal sealed class GenericPoint
     private readonly SeededBits random;
     private readonly WorkLimit limit;
     private readonly List<Real> leaves;
+    private readonly List<GivenReal> settled;
     private readonly List<Unknown> unknowns = [];
     private readonly Dictionary<Real, int> unknownOf = new(ReferenceEqualityComparer.Instance);
 
@@ -33,8 +34,11 @@ internal sealed class GenericPoint
     {
         this.random = random;
         this.limit = limit;
-        this.leaves = leaves;
-        foreach (Real leaf in leaves)
+        // Beside a given angle, lengths and numbers keep the values they have: with the angle as the one unknown the identity can be proved.
+        bool hasGivenAngle = leaves.Exists(leaf => leaf is DirectionReal { Source.Name: not null });
+        settled = hasGivenAngle ? [.. leaves.OfType<GivenReal>()] : [];
+        this.leaves = hasGivenAngle ? [.. leaves.Where(leaf => leaf is not GivenReal)] : leaves;
+        foreach (Real leaf in this.leaves)
             Place(leaf);
     }
 
@@ -185,6 +189,8 @@ internal sealed class GenericPoint
 
     private bool Fill(Dictionary<Real, Real> standIns)
     {
+        foreach (GivenReal given in settled)
+            standIns[given] = given.Value;
         foreach (Real leaf in leaves)
         {
             Unknown unknown = unknowns[unknownOf[leaf]];
