@@ -54,7 +54,11 @@ public static class CutFile
             Scene.Pen pen = Pens.Kept(alike.Key.Item1, alike.Key.Item2);
             XAttribute[] stroke = pen.Dashes.IsEmpty
                 ? [new XAttribute("stroke-width", SvgWriter.Figure(pen.WidthMillimetres))]
-                : [new XAttribute("stroke-width", SvgWriter.Figure(pen.WidthMillimetres)), new XAttribute("stroke-dasharray", string.Join(' ', pen.Dashes.Select(SvgWriter.Figure)))];
+                :
+                [
+                    new XAttribute("stroke-width", SvgWriter.Figure(pen.WidthMillimetres)),
+                    new XAttribute("stroke-dasharray", string.Join(' ', pen.Dashes.Select(SvgWriter.Figure))),
+                ];
             foreach ((Point at, double radius) in Circles(alike))
             {
                 group.Add(SvgWriter.Circle(middleX + at.XMillimetres, middleY - at.YMillimetres, radius, stroke));

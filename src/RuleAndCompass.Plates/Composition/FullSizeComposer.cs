@@ -27,6 +27,9 @@ internal sealed class FullSizeComposer
     private const double SpanRowHeight = 8;
     private const double NameGap = 1.4;
 
+    // A name stands near its mark and on nothing, or not at all: what is pricked through must not be covered.
+    private const int NearPlaces = 24;
+
     private static readonly double titleSize = Face.SizeForCapitals(TitleHeight);
     private static readonly double wordSize = Face.SizeForCapitals(WordHeight);
     private static readonly double nameSize = Face.SizeForCapitals(NameHeight);
@@ -102,7 +105,10 @@ internal sealed class FullSizeComposer
         }
 
         // Bars and words first, since a name finds room more easily.
-        if (isSheet ? !InFreeRoom(canvas, placement, pageBox, leavesNamesOut) : !BesideSheet(canvas, placement, pageBox, view.OnPage(tracing.Sheet), leavesNamesOut))
+        bool hasRoom = isSheet
+            ? InFreeRoom(canvas, placement, pageBox, leavesNamesOut)
+            : BesideSheet(canvas, placement, pageBox, view.OnPage(tracing.Sheet), leavesNamesOut);
+        if (!hasRoom)
         {
             return null;
         }
@@ -114,10 +120,9 @@ internal sealed class FullSizeComposer
             {
                 string shown = Typesetting.Fit(name, Typeface.Text, nameSize, 60);
                 (double width, double height) = Canvas.LabelSize(shown, Typeface.Text, nameSize);
-                PlacedLabel label = placement.Place(LabelPlacement.Around(at, width, height, NameGap), always, dropsUnreadable: true);
-                if (!label.IsUnreadable && (isOwn || !label.IsCrowded))
+                PlacedLabel label = placement.Place(LabelPlacement.Around(at, width, height, NameGap).Take(NearPlaces), always, placed => !placed.IsCrowded);
+                if (!label.IsCrowded)
                 {
-                    canvas.Tie(Role.Name, label, CrossClear, Pens.Thin);
                     canvas.Label(Role.Name, shown, label.Box, Typeface.Text, nameSize, Ink.Black);
                 }
                 else if (isOwn && !leavesNamesOut)
@@ -253,7 +258,9 @@ internal sealed class FullSizeComposer
         List<string> lines = WordLines(90, isSheet: true, leavesNamesOut);
         List<string> title = TitleLines(90);
         double wordsHeight = (title.Count * 5.5) + 2 + (lines.Count * 4);
-        double wordsWidth = Math.Max(lines.Max(line => Typesetting.Width(line, Typeface.Text, wordSize)), title.Max(line => Typesetting.Width(line, Typeface.Strong, titleSize)));
+        double wordsWidth = Math.Max(
+            lines.Max(line => Typesetting.Width(line, Typeface.Text, wordSize)),
+            title.Max(line => Typesetting.Width(line, Typeface.Strong, titleSize)));
         if (FreeRoom(placement, page, wordsWidth + 4, wordsHeight + 4) is not { } words)
         {
             return false;
@@ -302,7 +309,7 @@ internal sealed class FullSizeComposer
 
     private List<string> WordLines(double measure, bool isSheet, bool leavesNamesOut)
     {
-        string size = StepPlateComposer.SheetText(layout.Sheet);
+        string size = TitleBlock.SheetText(layout.Sheet);
         List<string> words =
         [
             $"Full size, 1 : 1. Sheet {size}" + (isSheet ? "; the edge of this page is its edge." : "; its edge is drawn."),
@@ -325,7 +332,9 @@ internal sealed class FullSizeComposer
     private List<string> TitleLines(double measure)
     {
         List<string> lines = Typesetting.Break(layout.Title, Typeface.Strong, titleSize, measure);
-        return lines.Count <= 2 ? [.. lines.DefaultIfEmpty("")] : [lines[0], Typesetting.Fit(string.Join(' ', lines.Skip(1)), Typeface.Strong, titleSize, measure)];
+        return lines.Count <= 2
+            ? [.. lines.DefaultIfEmpty("")]
+            : [lines[0], Typesetting.Fit(string.Join(' ', lines.Skip(1)), Typeface.Strong, titleSize, measure)];
     }
 
     private static void Write(Canvas canvas, List<string> title, List<string> lines, Spot at)

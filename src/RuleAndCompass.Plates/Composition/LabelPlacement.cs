@@ -151,8 +151,8 @@ internal sealed class LabelPlacement(Box window)
 
     /// <summary>Takes the first of the places that is free, else the one that covers least, and blocks it.</summary>
     /// <param name="places">Best first.</param>
-    /// <param name="dropsUnreadable">Whether a label that would lie on another is left out, so that its place stays free.</param>
-    public PlacedLabel Place(IEnumerable<LabelPlace> places, PlateSet plates, bool dropsUnreadable = false)
+    /// <param name="isTaken">Whether the caller will use such a place; one that is not used stays free. Null where any will do.</param>
+    public PlacedLabel Place(IEnumerable<LabelPlace> places, PlateSet plates, Predicate<PlacedLabel>? isTaken = null)
     {
         LabelPlace best = default;
         double least = double.PositiveInfinity;
@@ -171,7 +171,7 @@ internal sealed class LabelPlacement(Box window)
         }
 
         PlacedLabel label = new(best.Box, best.Anchor, least > 0, least >= LabelCost);
-        if (!label.IsUnreadable || !dropsUnreadable)
+        if (isTaken is null || isTaken(label))
         {
             Block(best.Box, plates);
         }

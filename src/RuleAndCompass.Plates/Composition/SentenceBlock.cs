@@ -16,7 +16,12 @@ internal sealed record SentenceBlock(int? Number, ImmutableArray<SentenceLine> L
 
     public static SentenceBlock OfAct(Act act, IEnumerable<string> cautions, PlateFormat format)
     {
-        List<SentenceLine> lines = [.. Typesetting.Break(act.Says, Typeface.Text, format.TextSize, format.Measure).Select(line => new SentenceLine(line, null, format.TextSize, PlateFormat.Leading * format.TextSize / 3.1))];
+        double leading = PlateFormat.Leading * format.TextSize / PlateFormat.A4.TextSize;
+        List<SentenceLine> lines =
+        [
+            .. Typesetting.Break(act.Says, Typeface.Text, format.TextSize, format.Measure)
+                .Select(line => new SentenceLine(line, null, format.TextSize, leading)),
+        ];
         if (act is Cross cross)
         {
             string tail = CrossesAt(CrossingAngle.Degrees((Curve)cross.First.Figure, (Curve)cross.Second.Figure, cross.Point.Point));

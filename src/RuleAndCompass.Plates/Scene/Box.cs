@@ -21,6 +21,10 @@ public readonly record struct Box(double Left, double Top, double Right, double 
     /// <summary>The smallest box round this one and a spot.</summary>
     public Box With(Spot spot) => new(Math.Min(Left, spot.X), Math.Min(Top, spot.Y), Math.Max(Right, spot.X), Math.Max(Bottom, spot.Y));
 
+    /// <summary>What of this box lies in the other.</summary>
+    public Box Within(Box other) =>
+        new(Math.Max(Left, other.Left), Math.Max(Top, other.Top), Math.Min(Right, other.Right), Math.Min(Bottom, other.Bottom));
+
     /// <summary>Whether the spot lies inside or on the edge.</summary>
     public bool Holds(Spot spot) => spot.X >= Left && spot.X <= Right && spot.Y >= Top && spot.Y <= Bottom;
 

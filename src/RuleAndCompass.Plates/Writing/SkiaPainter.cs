@@ -137,7 +137,8 @@ internal static class SkiaPainter
         _ => false,
     };
 
-    private static bool Same(Pen a, Pen b) => ReferenceEquals(a, b) || (a.Ink == b.Ink && a.WidthMillimetres == b.WidthMillimetres && a.Dashes.SequenceEqual(b.Dashes));
+    private static bool Same(Pen a, Pen b) =>
+        ReferenceEquals(a, b) || (a.Ink == b.Ink && a.WidthMillimetres == b.WidthMillimetres && a.Dashes.SequenceEqual(b.Dashes));
 
     private static SKPathEffect? Dashes(ImmutableArray<double> lengths) =>
         lengths.IsEmpty ? null : SKPathEffect.CreateDash([.. lengths.Select(length => (float)length)], 0);

@@ -88,8 +88,8 @@ internal sealed class MarkIndex(Decider decider)
 
     private bool IsSame(Line a, Line b)
     {
-        double ax = a.Direction.X.ToDouble(), ay = a.Direction.Y.ToDouble();
-        double sx = b.Start.XMillimetres - a.Start.XMillimetres, sy = b.Start.YMillimetres - a.Start.YMillimetres;
+        double ax = a.Direction.X.Near(), ay = a.Direction.Y.Near();
+        double sx = b.Start.X.Near() - a.Start.X.Near(), sy = b.Start.Y.Near() - a.Start.Y.Near();
         if (Math.Abs((ax * sy) - (ay * sx)) > CellMillimetres * 10 * Math.Sqrt((ax * ax) + (ay * ay)) * Math.Max(1, Math.Sqrt((sx * sx) + (sy * sy))))
             return false;
         int shared = b.Holds.Count(a.IsKnownToHold);
@@ -106,16 +106,16 @@ internal sealed class MarkIndex(Decider decider)
 
     private static bool IsNear(Real a, Real b)
     {
-        double first = a.ToDouble(), second = b.ToDouble();
+        double first = a.Near(), second = b.Near();
         return Math.Abs(first - second) <= CellMillimetres * Math.Max(1, Math.Abs(first));
     }
 
-    private static (long X, long Y) Cell(Point point) => ((long)Math.Floor(point.XMillimetres / CellMillimetres), (long)Math.Floor(point.YMillimetres / CellMillimetres));
+    private static (long X, long Y) Cell(Point point) => ((long)Math.Floor(point.X.Near() / CellMillimetres), (long)Math.Floor(point.Y.Near() / CellMillimetres));
 
     private static (long Turn, long Offset) Cell(Line line)
     {
         (double dx, double dy) = Upward(line.Direction);
-        double offset = ((dx * line.Start.YMillimetres) - (dy * line.Start.XMillimetres)) / Math.Sqrt((dx * dx) + (dy * dy));
+        double offset = ((dx * line.Start.Y.Near()) - (dy * line.Start.X.Near())) / Math.Sqrt((dx * dx) + (dy * dy));
         return (Cell(line.Direction), (long)Math.Floor(offset / CellMillimetres));
     }
 
@@ -128,7 +128,7 @@ internal sealed class MarkIndex(Decider decider)
     // Of the two ways a line runs, the one in the upper half plane.
     private static (double Dx, double Dy) Upward(Vector way)
     {
-        double dx = way.X.ToDouble(), dy = way.Y.ToDouble();
+        double dx = way.X.Near(), dy = way.Y.Near();
         return dy < 0 || (dy == 0 && dx < 0) ? (-dx, -dy) : (dx, dy);
     }
 

@@ -54,7 +54,7 @@ public sealed partial class Maker
         decider = new(new DeciderOptions(SHA256.HashData(Encoding.UTF8.GetBytes(script.Text)), options.Prove, TimeLimit: options.TimeLimit), cancellation);
         evaluator = new(decider);
         bench = new(head.Kit, decider, Binding.NamesIn(script.Sentences), options.MaximumActs);
-        constructions = new(bench, head.Room);
+        constructions = new(bench, head.Room, head.Sheet);
         stages = new(head.Title ?? "The layout");
     }
 
@@ -120,7 +120,7 @@ public sealed partial class Maker
 
     private Layout Result() => new(
         script, head.Title ?? "", [.. notes], head.Sheet, head.Board, head.Kit, head.Hand, [.. givens], [.. stages.Stages], [.. bench.Acts], [.. claims],
-        [.. comparisons.Select(comparison => comparison with { FarEnd = FarEnd.Of(comparison, kept) })], [.. kept], [.. letterings], isDial || RecipeShelf.SpeaksOfDials(head.Title))
+        [.. comparisons.Select(comparison => comparison with { FarEnd = FarEnd.Of(comparison, kept) })], [.. kept], [.. letterings], isDial || RecipeShelf.SpeaksOfDials(head.Title) || comparisons.Exists(comparison => comparison.TimedBy is not null))
     {
         Decider = decider,
     };

@@ -7,6 +7,7 @@ internal sealed class StageBook(string firstTitle)
     private readonly List<int> children = [];
     private readonly Dictionary<(int Parent, string Title), (int Stage, int ActsThen)> lastOfParent = [];
     private int topLevel;
+    private int opening = -1;
 
     public IReadOnlyList<Stage> Stages => stages;
 
@@ -20,7 +21,7 @@ internal sealed class StageBook(string firstTitle)
     public int ForAct()
     {
         if (Current < 0)
-            Current = Add(firstTitle, -1);
+            Current = opening >= 0 ? opening : opening = Add(firstTitle, -1);
         return Current;
     }
 

@@ -11,6 +11,9 @@ internal readonly struct Ball
 {
     private const int RadiusBits = 30;
 
+    // So that sums of exponents and shifts stay within an int.
+    private const int MostExponent = 1 << 28;
+
     public readonly BigInteger Middle;
     public readonly int Exponent;
     public readonly long Radius;
@@ -47,14 +50,6 @@ internal readonly struct Ball
             ? BigInteger.DivRem(value.Numerator << (int)shift, value.Denominator, out BigInteger remainder)
             : BigInteger.DivRem(value.Numerator, value.Denominator << (int)-shift, out remainder);
         return Rounded(quotient, (int)-shift, remainder.IsZero ? BigInteger.Zero : BigInteger.One, bits);
-    }
-
-    /// <summary>The hull of two rationals.</summary>
-    public static Ball Hull(Rational from, Rational to, int bits)
-    {
-        Ball middle = Of((from + to) / 2, bits);
-        Ball half = Of((to - from).Abs() / 2, RadiusBits);
-        return middle.Widened(half, bits);
     }
 
     public static Ball Add(in Ball a, in Ball b, int bits) => Sum(a, b, 1, bits);
@@ -233,6 +228,9 @@ internal readonly struct Ball
     private static Ball Rounded(BigInteger middle, int exponent, BigInteger radius, int bits)
     {
         int drop = (int)Math.Max(Math.Max(0, middle.GetBitLength() - bits), radius.GetBitLength() - RadiusBits);
+        if (Math.Abs((long)exponent + drop) > MostExponent)
+            return Unknown;
+
         return drop == 0
             ? new Ball(middle, exponent, (long)radius)
             : new Ball(middle >> drop, exponent + drop, (long)(radius >> drop) + 2);

@@ -213,7 +213,17 @@ public sealed class Decider
         Real rebuilt = FreeNodes.Detach(x, free);
         List<Real> leaves = StraightLine.LeavesOf(rebuilt);
         WorkLimit limit = NewLimit();
-        Verdict? found = leaves.Count == 0 ? null : new GenericPoint(leaves, random, limit).TryVanishing(rebuilt, MaximumDegree);
+        Verdict? found = null;
+        try
+        {
+            if (leaves.Count > 0)
+                found = new GenericPoint(leaves, random, limit).TryVanishing(rebuilt, MaximumDegree);
+        }
+        catch (Exception failure) when (failure is OutOfTimeException or NumberTooLongException)
+        {
+            return false;
+        }
+
         if (found is null)
             return false;
 
@@ -283,7 +293,7 @@ public sealed class Decider
             var joint = new JointField(line, ExactForm.MostDegree, random, NewLimit());
             return joint.FindElement() is { } element ? ExactForm.Of(element, joint) : null;
         }
-        catch (Exception failure) when (failure is NegativeRadicandException or TowerTooHighException or DivideByZeroException)
+        catch (Exception failure) when (failure is NegativeRadicandException or TowerTooHighException or DivideByZeroException or OutOfTimeException or NumberTooLongException)
         {
             return null;
         }
@@ -326,7 +336,38 @@ public sealed class Decider
     private bool? DecideZero(Real x, StraightLine? line, WorkLimit limit, out Verdict? verdict)
     {
         verdict = null;
-        line ??= StraightLine.Compile(x, Specific);
+        try
+        {
+            return DecideByField(x, line ?? StraightLine.Compile(x, Specific), limit, ref verdict);
+        }
+        catch (TowerTooHighException tooHigh)
+        {
+            throw new UndecidedException(
+                $"the decision needs numbers of degree {tooHigh.Degree.ToString(CultureInfo.InvariantCulture)}",
+                KnownOf(x));
+        }
+        catch (OutOfTimeException)
+        {
+            throw new UndecidedException("the decision takes longer than the time allowed", KnownOf(x));
+        }
+        catch (NumberTooLongException)
+        {
+            throw new UndecidedException("the decision needs numbers of too many digits", KnownOf(x));
+        }
+        catch (DivideByZeroException)
+        {
+            throw new UndecidedException("a divisor is exactly 0", KnownOf(x));
+        }
+        catch (NegativeRadicandException)
+        {
+            throw new UndecidedException("a radicand is negative", KnownOf(x));
+        }
+    }
+
+    private Verdict KnownOf(Real x) => new(Certainty.Digits, DigitsBelow(Enclosures.Of(x, FirstBits, cancellation)), []);
+
+    private bool? DecideByField(Real x, StraightLine? line, WorkLimit limit, ref Verdict? verdict)
+    {
         if (line is null || line.HasLeaves)
         {
             List<Real> leaves = StraightLine.LeavesOf(x);
@@ -341,32 +382,9 @@ public sealed class Decider
             return verdict is null ? null : true;
         }
 
-        try
-        {
-            bool isZero = new JointField(line, MaximumDegree, random, limit).DecideZero(out int bits);
-            verdict = bits == 0 ? Verdict.Proved : new Verdict(Certainty.Certain, bits, []);
-            return isZero;
-        }
-        catch (TowerTooHighException tooHigh)
-        {
-            throw new UndecidedException(
-                $"the decision needs numbers of degree {tooHigh.Degree.ToString(CultureInfo.InvariantCulture)}",
-                new Verdict(Certainty.Digits, DigitsBelow(Enclosures.Of(x, FirstBits, cancellation)), []));
-        }
-        catch (OutOfTimeException)
-        {
-            throw new UndecidedException(
-                "the decision takes longer than the time allowed",
-                new Verdict(Certainty.Digits, DigitsBelow(Enclosures.Of(x, FirstBits, cancellation)), []));
-        }
-        catch (DivideByZeroException)
-        {
-            throw new UndecidedException("a divisor is exactly 0", new Verdict(Certainty.Digits, 0, []));
-        }
-        catch (NegativeRadicandException)
-        {
-            throw new UndecidedException("a radicand is negative", new Verdict(Certainty.Digits, 0, []));
-        }
+        bool isZero = new JointField(line, MaximumDegree, random, limit).DecideZero(out int bits);
+        verdict = bits == 0 ? Verdict.Proved : new Verdict(Certainty.Certain, bits, []);
+        return isZero;
     }
 
     // A leaf by its own value where that is constructible.

@@ -79,7 +79,8 @@ internal static class Elementary
         if (degrees.IsExact)
             return (cosine, sine);
 
-        Ball slack = Ball.Around(BigInteger.Zero, degrees.Exponent, degrees.Radius, bits);
+        // π/180 is less than 9/512.
+        Ball slack = Ball.Around(BigInteger.Zero, degrees.Exponent - 9, 9 * (BigInteger)degrees.Radius, bits);
         return (cosine.Widened(slack, bits), sine.Widened(slack, bits));
     }
 

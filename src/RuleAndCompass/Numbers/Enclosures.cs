@@ -63,7 +63,7 @@ internal static class Enclosures
                 return x.Low;
 
             // A number that may be 0 and is far below every use of a double.
-            if (bits >= 1024 && x.Low > -1e-150 && x.High < 1e-150)
+            if (bits > FirstBits && x.Low > -1e-40 && x.High < 1e-40)
                 return 0;
         }
 

@@ -19,6 +19,18 @@ internal sealed record FieldElement(ulong Generators, BigInteger[] Coefficients,
 
     public bool IsRational => Generators == 0;
 
+    /// <summary>The length of the longest coefficient or of the denominator.</summary>
+    public long Bits
+    {
+        get
+        {
+            long bits = Denominator.GetBitLength();
+            foreach (BigInteger coefficient in Coefficients)
+                bits = Math.Max(bits, coefficient.GetBitLength());
+            return bits;
+        }
+    }
+
     public static FieldElement Of(Rational value) => new(0, [value.Numerator], value.Denominator);
 
     public Rational ToRational() => new(Coefficients[0], Denominator);

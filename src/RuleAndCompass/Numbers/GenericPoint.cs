@@ -49,7 +49,7 @@ internal sealed class GenericPoint
 
         public Rational Near { get; set; }
 
-        public string? Words { get; init; }
+        public string? Name => Source is { } angle ? angle.Name : (Number as GivenReal)?.Name;
     }
 
     /// <summary>The verdict where <paramref name="x"/> vanishes identically; null where it does not, or where this cannot tell.</summary>
@@ -64,7 +64,7 @@ internal sealed class GenericPoint
 
             StraightLine line = StraightLine.Compile(x, leaf => standIns[leaf])!;
             limit.Check();
-            Bounds bounds = Bounds.Of(line, IndexOf(line, standIns), unknowns.Count);
+            Bounds bounds = Bounds.Of(line, IndexOf(line, standIns));
             if (bounds.LogDegree > RandomBits - LeastCertainty)
                 return null;
 
@@ -94,10 +94,10 @@ internal sealed class GenericPoint
 
             if (!isZero)
                 return null;
-            if (!BranchHolds(line, joint, standIns, nearness))
+            if (!BranchHolds(line, joint, NearHulls(line, standIns, nearness), nearness))
                 continue;
 
-            ImmutableArray<string> names = [.. unknowns.Where(unknown => unknown.Words is not null).Select(unknown => unknown.Words!)];
+            ImmutableArray<string> names = [.. unknowns.Select(unknown => unknown.Name).OfType<string>()];
             int size = RandomBits - bounds.LogDegree;
             if (certainty > 0)
             {
@@ -122,7 +122,7 @@ internal sealed class GenericPoint
         if (leaf is not DirectionReal direction)
         {
             unknownOf[leaf] = unknowns.Count;
-            unknowns.Add(new Unknown(null, leaf) { Words = leaf is GivenReal given ? given.Name : null });
+            unknowns.Add(new Unknown(null, leaf));
             return;
         }
 
@@ -130,8 +130,7 @@ internal sealed class GenericPoint
         if (at < 0)
         {
             at = unknowns.Count;
-            AngleSource source = direction.Source;
-                        unknowns.Add(new Unknown(source, null) { Unit = direction.Multiple.Abs(), Words = source.Name });
+            unknowns.Add(new Unknown(direction.Source, null) { Unit = direction.Multiple.Abs() });
         }
         else
         {
@@ -220,41 +219,49 @@ internal sealed class GenericPoint
     private Dictionary<int, (int Unknown, int Degree)> IndexOf(StraightLine line, Dictionary<Real, Real> standIns)
     {
         var places = new Dictionary<int, (int, int)>();
-        foreach (Real leaf in leaves)
+        foreach ((int at, Real leaf) in PlacesOf(line, standIns))
         {
-            Rational value = ((RationalReal)standIns[leaf]).Value;
-            Unknown unknown = unknowns[unknownOf[leaf]];
-            int degree = leaf is DirectionReal direction ? 2 * (int)BigInteger.Abs((direction.Multiple / unknown.Unit).Numerator) : -1;
-            for (int i = 0; i < line.Count; i++)
-            {
-                if (line[i].IsConstant && line[i].Value == value)
-                    places[i] = (unknownOf[leaf], degree);
-            }
+            Rational unit = unknowns[unknownOf[leaf]].Unit;
+            int degree = leaf is DirectionReal direction ? 2 * (int)BigInteger.Abs((direction.Multiple / unit).Numerator) : -1;
+            places[at] = (unknownOf[leaf], degree);
         }
 
         return places;
     }
 
-    // No radicand and no divisor vanishes while the unknowns move from their values to the random ones.
-    private bool BranchHolds(StraightLine line, JointField joint, Dictionary<Real, Real> standIns, int nearness)
+    // Where the leaves may be: between their values and the random ones.
+    private Dictionary<int, Ball> NearHulls(StraightLine line, Dictionary<Real, Real> standIns, int nearness)
     {
-        int bits = nearness + 128;
         var hulls = new Dictionary<int, Ball>();
+        foreach ((int at, Real leaf) in PlacesOf(line, standIns))
+            hulls[at] = NearHull(leaf, unknowns[unknownOf[leaf]], line[at].Value, nearness, nearness + 128);
+        return hulls;
+    }
+
+    private IEnumerable<(int At, Real Leaf)> PlacesOf(StraightLine line, Dictionary<Real, Real> standIns)
+    {
         foreach (Real leaf in leaves)
         {
             Rational value = ((RationalReal)standIns[leaf]).Value;
-            Unknown unknown = unknowns[unknownOf[leaf]];
-            // |t − t*| ≤ 2^(2−nearness), and the point turns by at most twice that for each multiple.
-            BigInteger factor = leaf is DirectionReal direction ? 2 * BigInteger.Abs((direction.Multiple / unknown.Unit).Numerator) : 1;
-            Ball hull = Ball.Around(BigInteger.Zero, 2 - nearness, factor, bits);
-            hull = Ball.Of(value, bits).Widened(Ball.Around(factor, 2 - nearness, BigInteger.Zero, bits), bits);
             for (int i = 0; i < line.Count; i++)
             {
                 if (line[i].IsConstant && line[i].Value == value)
-                    hulls[i] = hull;
+                    yield return (i, leaf);
             }
         }
+    }
 
+    // |t − t*| ≤ 2^(2−nearness), and the point turns by at most twice that for each multiple.
+    private static Ball NearHull(Real leaf, Unknown unknown, Rational value, int nearness, int bits)
+    {
+        BigInteger factor = leaf is DirectionReal direction ? 2 * BigInteger.Abs((direction.Multiple / unknown.Unit).Numerator) : 1;
+        return Ball.Of(value, bits).Widened(Ball.Around(factor, 2 - nearness, BigInteger.Zero, bits), bits);
+    }
+
+    // No radicand and no divisor vanishes while the leaves move in their hulls.
+    private static bool BranchHolds(StraightLine line, JointField joint, Dictionary<int, Ball> hulls, int bits)
+    {
+        bits += 128;
         Ball[] balls = ProgramBalls.Evaluate(line, hulls, bits);
         for (int i = 0; i < line.Count; i++)
         {

@@ -20,11 +20,17 @@ internal readonly struct Interval(double low, double high)
         return new(Math.BitDecrement(near), Math.BitIncrement(near));
     }
 
-    public static Interval Add(Real a, Real b) => Outward(a.Low + b.Low, a.High + b.High);
+    public static Interval Of(Ball ball)
+    {
+        (double low, double high) = ball.ToDoubles();
+        return new(low, high);
+    }
 
-    public static Interval Subtract(Real a, Real b) => Outward(a.Low - b.High, a.High - b.Low);
+    public static Interval Add(Interval a, Interval b) => Outward(a.Low + b.Low, a.High + b.High);
 
-    public static Interval Multiply(Real a, Real b)
+    public static Interval Subtract(Interval a, Interval b) => Outward(a.Low - b.High, a.High - b.Low);
+
+    public static Interval Multiply(Interval a, Interval b)
     {
         if (a.Low >= 0 && b.Low >= 0)
             return Outward(a.Low * b.Low, a.High * b.High);
@@ -37,7 +43,7 @@ internal readonly struct Interval(double low, double high)
         return Outward(Math.Min(Math.Min(p, q), Math.Min(r, s)), Math.Max(Math.Max(p, q), Math.Max(r, s)));
     }
 
-    public static Interval Divide(Real a, Real b)
+    public static Interval Divide(Interval a, Interval b)
     {
         if (b.Low <= 0 && b.High >= 0)
             return Everything;
@@ -53,21 +59,20 @@ internal readonly struct Interval(double low, double high)
     }
 
     /// <summary>The radicand is not negative, whatever its enclosure says.</summary>
-    public static Interval Sqrt(Real a)
+    public static Interval Sqrt(Interval a)
     {
         Interval root = Outward(Math.Sqrt(Math.Max(a.Low, 0)), Math.Sqrt(Math.Max(a.High, 0)));
         return new(Math.Max(root.Low, 0), root.High);
     }
 
-    /// <summary>An operation on intervals that stand for whole pieces; a radicand is not negative.</summary>
     public static Interval Apply(Operation operation, Interval a, Interval b) => operation switch
     {
-        Operation.Add => Outward(a.Low + b.Low, a.High + b.High),
-        Operation.Subtract => Outward(a.Low - b.High, a.High - b.Low),
-        Operation.Multiply => Hull(a.Low * b.Low, a.Low * b.High, a.High * b.Low, a.High * b.High),
-        Operation.Divide when b.Low > 0 || b.High < 0 => Hull(a.Low / b.Low, a.Low / b.High, a.High / b.Low, a.High / b.High),
-        Operation.Sqrt => Outward(Math.Sqrt(Math.Max(a.Low, 0)), Math.Sqrt(Math.Max(a.High, 0))),
-        _ => Everything,
+        Operation.Add => Add(a, b),
+        Operation.Subtract => Subtract(a, b),
+        Operation.Multiply => Multiply(a, b),
+        Operation.Divide => Divide(a, b),
+        Operation.Sqrt => Sqrt(a),
+        _ => new(-180, 180),
     };
 
     /// <summary>The square, which is not negative however the interval lies.</summary>
@@ -83,8 +88,6 @@ internal readonly struct Interval(double low, double high)
         double low = Math.Max(a.Low, b.Low), high = Math.Min(a.High, b.High);
         return low <= high ? new(low, high) : a;
     }
-
-    private static Interval Hull(double p, double q, double r, double s) => Outward(Math.Min(Math.Min(p, q), Math.Min(r, s)), Math.Max(Math.Max(p, q), Math.Max(r, s)));
 
     private static Interval Outward(double low, double high)
     {

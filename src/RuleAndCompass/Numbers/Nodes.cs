@@ -43,12 +43,6 @@ internal abstract class QuantityReal : Real
     }
 
     public abstract Ball Enclose(int bits);
-
-    private protected static Interval FirstEnclosure(Ball ball)
-    {
-        (double low, double high) = ball.ToDoubles();
-        return new(low, high);
-    }
 }
 
 /// <summary>π.</summary>
@@ -81,7 +75,7 @@ internal sealed class GivenReal(string name, Rational value, Rational? from, Rat
 internal sealed class DirectionReal : QuantityReal
 {
     public DirectionReal(AngleSource source, Rational multiple, bool isSine)
-        : base(FirstEnclosure(Enclose(source, multiple, isSine, 64)))
+        : base(Interval.Of(Enclose(source, multiple, isSine, 64)))
     {
         Source = source;
         Multiple = multiple;

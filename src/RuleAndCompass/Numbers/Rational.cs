@@ -54,6 +54,9 @@ public readonly struct Rational : IEquatable<Rational>, IComparable<Rational>
     /// <summary>Greater than zero.</summary>
     public BigInteger Denominator => denominator.IsZero ? BigInteger.One : denominator;
 
+    /// <summary>The length of both parts together.</summary>
+    internal long Bits => numerator.GetBitLength() + denominator.GetBitLength();
+
     /// <summary>Whether this is 0.</summary>
     public bool IsZero => numerator.IsZero;
 

@@ -7,6 +7,8 @@ namespace RuleAndCompass.Numbers;
 /// </remarks>
 public abstract class Real
 {
+    private const long MostFoldedBits = 200_000;
+
     private protected Real(Interval enclosure)
     {
         Low = enclosure.Low;
@@ -28,6 +30,8 @@ public abstract class Real
     /// <summary>Not below the value.</summary>
     internal double High { get; private set; }
 
+    private Interval Enclosure => new(Low, High);
+
     /// <summary>For <see cref="StraightLine"/>: a stamp in the high half, a place in the low one, written at once.</summary>
     internal long Mark { get; set; }
 
@@ -43,7 +47,7 @@ public abstract class Real
         if (a is RationalReal p)
         {
             if (b is RationalReal q)
-                return new RationalReal(p.Value + q.Value);
+                return Folded(Operation.Add, a, b, p.Value, q.Value);
             if (p.Value.IsZero)
                 return b;
         }
@@ -52,7 +56,7 @@ public abstract class Real
             return a;
         }
 
-        return new OperationReal(Operation.Add, a, b, Interval.Add(a, b));
+        return new OperationReal(Operation.Add, a, b, Interval.Add(a.Enclosure, b.Enclosure));
     }
 
     /// <summary>The difference.</summary>
@@ -61,12 +65,12 @@ public abstract class Real
         if (b is RationalReal q)
         {
             if (a is RationalReal p)
-                return new RationalReal(p.Value - q.Value);
+                return Folded(Operation.Subtract, a, b, p.Value, q.Value);
             if (q.Value.IsZero)
                 return a;
         }
 
-        return ReferenceEquals(a, b) ? Zero : new OperationReal(Operation.Subtract, a, b, Interval.Subtract(a, b));
+        return ReferenceEquals(a, b) ? Zero : new OperationReal(Operation.Subtract, a, b, Interval.Subtract(a.Enclosure, b.Enclosure));
     }
 
     /// <summary>The product.</summary>
@@ -75,7 +79,7 @@ public abstract class Real
         if (a is RationalReal p)
         {
             if (b is RationalReal q)
-                return new RationalReal(p.Value * q.Value);
+                return Folded(Operation.Multiply, a, b, p.Value, q.Value);
             if (p.Value.IsZero)
                 return a;
             if (p.Value == Rational.One)
@@ -89,7 +93,7 @@ public abstract class Real
                 return a;
         }
 
-        return new OperationReal(Operation.Multiply, a, b, Interval.Multiply(a, b));
+        return new OperationReal(Operation.Multiply, a, b, Interval.Multiply(a.Enclosure, b.Enclosure));
     }
 
     /// <summary>The quotient. The caller has decided that <paramref name="b"/> is not zero.</summary>
@@ -99,7 +103,7 @@ public abstract class Real
         if (b is RationalReal q)
         {
             if (a is RationalReal p)
-                return new RationalReal(p.Value / q.Value);
+                return Folded(Operation.Divide, a, b, p.Value, q.Value);
             if (q.Value.IsZero)
                 throw new DivideByZeroException("The divisor is 0.");
             if (q.Value == Rational.One)
@@ -110,13 +114,13 @@ public abstract class Real
             return a;
         }
 
-        return ReferenceEquals(a, b) ? One : new OperationReal(Operation.Divide, a, b, Interval.Divide(a, b));
+        return ReferenceEquals(a, b) ? One : new OperationReal(Operation.Divide, a, b, Interval.Divide(a.Enclosure, b.Enclosure));
     }
 
     /// <summary>The number with the other sign.</summary>
     public static Real operator -(Real a) => a is RationalReal p
         ? new RationalReal(-p.Value)
-        : new OperationReal(Operation.Subtract, Zero, a, Interval.Subtract(Zero, a));
+        : new OperationReal(Operation.Subtract, Zero, a, Interval.Subtract(Zero.Enclosure, a.Enclosure));
 
     /// <summary>The root that is not negative. The caller has decided that <paramref name="radicand"/> is not negative.</summary>
     /// <exception cref="ArgumentException"><paramref name="radicand"/> is a negative rational.</exception>
@@ -130,7 +134,7 @@ public abstract class Real
                 return new RationalReal(new Rational(numerator, denominator));
         }
 
-        return new OperationReal(Operation.Sqrt, radicand, null, Interval.Sqrt(radicand));
+        return new OperationReal(Operation.Sqrt, radicand, null, Interval.Sqrt(radicand.Enclosure));
     }
 
     /// <summary>A number or length given in the script: its value is known exactly; identities are sought for every value of it.</summary>
@@ -143,13 +147,47 @@ public abstract class Real
         return this is RationalReal;
     }
 
+    /// <summary>A double good to nine places at least, from the enclosure at hand where that will do: for sorting and choosing, never for deciding.</summary>
+    internal double Near()
+    {
+        double middle = Low + ((High - Low) / 2);
+        return High - Low <= 1e-9 * Math.Max(1, Math.Abs(middle)) ? middle : ToDouble();
+    }
+
     /// <summary>Within one unit in the last place of the true value.</summary>
     public double ToDouble()
     {
+        if (this is RationalReal rational)
+            return rational.Value.ToDouble();
+        if (this is GivenReal given)
+            return given.Value.ToDouble();
         if (Low == High || High <= Math.BitIncrement(Low))
             return Low;
 
         return Enclosures.ToDouble(this);
+    }
+
+    // Rational arithmetic folds at once, unless the result had more than 60,000 digits or so.
+    private static Real Folded(Operation operation, Real a, Real b, Rational p, Rational q)
+    {
+        if (p.Bits + q.Bits <= MostFoldedBits)
+        {
+            return new RationalReal(operation switch
+            {
+                Operation.Add => p + q,
+                Operation.Subtract => p - q,
+                Operation.Multiply => p * q,
+                _ => p / q,
+            });
+        }
+
+        return new OperationReal(operation, a, b, operation switch
+        {
+            Operation.Add => Interval.Add(a.Enclosure, b.Enclosure),
+            Operation.Subtract => Interval.Subtract(a.Enclosure, b.Enclosure),
+            Operation.Multiply => Interval.Multiply(a.Enclosure, b.Enclosure),
+            _ => q.IsZero ? throw new DivideByZeroException("The divisor is 0.") : Interval.Divide(a.Enclosure, b.Enclosure),
+        });
     }
 
     /// <summary>Keeps the tighter bounds.</summary>

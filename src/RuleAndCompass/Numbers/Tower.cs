@@ -15,6 +15,9 @@ internal sealed class Tower(WorkLimit limit)
 {
     private const int MostGenerators = 60;
 
+    // A hundred thousand digits or so: beyond, bringing a fraction to lowest terms takes seconds.
+    private const long MostCoefficientBits = 4_000_000;
+
     // Of 64 machine integers the recursion keeps a few hundred on the stack.
     private const int MostSmallLevels = 6;
 
@@ -41,6 +44,12 @@ internal sealed class Tower(WorkLimit limit)
     {
         if (a.IsZero || b.IsZero)
             return FieldElement.Zero;
+        if (a.IsRational || b.IsRational)
+        {
+            if (a.Bits + b.Bits > MostCoefficientBits)
+                throw new NumberTooLongException();
+        }
+
         if (a.IsRational)
             return b.Scaled(a.Coefficients[0], a.Denominator);
         if (b.IsRational)
@@ -50,6 +59,9 @@ internal sealed class Tower(WorkLimit limit)
         int[] levels = FieldElement.Levels(all);
         if (levels.Length <= MostSmallLevels && SmallMultiply(a, b, all, levels) is { } small)
             return small;
+
+        if (a.Bits + b.Bits > MostCoefficientBits)
+            throw new NumberTooLongException();
 
         var product = new BigInteger[1 << levels.Length];
         MultiplyInto(product, a.Spread(all), b.Spread(all), levels.Length, all, levels);
@@ -542,6 +554,9 @@ internal sealed class Tower(WorkLimit limit)
 
 /// <summary>A number that was to be rooted is negative at the point of evaluation.</summary>
 internal sealed class NegativeRadicandException : Exception;
+
+/// <summary>Coefficients became too long to go on.</summary>
+internal sealed class NumberTooLongException : Exception;
 
 /// <summary>The degree the tower would have reached.</summary>
 internal sealed class TowerTooHighException(long degree) : Exception

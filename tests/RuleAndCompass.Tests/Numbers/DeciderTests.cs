@@ -140,4 +140,73 @@ public sealed class DeciderTests
         verdict.IsDecided.ShouldBeTrue();
         decider.HoldsIdentically(sum + c[0] * c[0] - 2, c, out _).ShouldBeFalse();
     }
+
+    [Fact]
+    public void What_was_decided_tells_the_range_over_which_nothing_vanishes()
+    {
+        Decider near = NewDecider();
+        Angle latitude = Angle.Given("latitude", new Rational(433, 10), 1, 89);
+        Decision decision = near.Recording(() => near.Decide(Real.Sqrt(1 - latitude.Sine * latitude.Sine) - latitude.Cosine));
+
+        decision.Verdict.ToString().ShouldBe("proved for every latitude");
+        near.FindRanges().ShouldBe([new ValidFor("latitude", true, 1, 89)]);
+
+        // Beyond a right angle the root is −cos: the identity ends there.
+        Decider far = NewDecider();
+        Angle wide = Angle.Given("latitude", new Rational(433, 10), -30, 150);
+        far.Recording(() => far.Decide(Real.Sqrt(1 - wide.Sine * wide.Sine) - wide.Cosine)).IsZero.ShouldBeTrue();
+        ValidFor range = far.FindRanges().ShouldHaveSingleItem();
+        range.From.ShouldBe(-30);
+        range.To!.Value.ShouldBeInRange(88, 90);
+    }
+
+    [Fact]
+    public void A_choice_that_changes_within_the_range_ends_it()
+    {
+        Decider decider = NewDecider();
+        Angle latitude = Angle.Given("latitude", 40, 1, 89);
+
+        decider.Recording(() => decider.Sign(latitude.Sine - latitude.Cosine)).ShouldBe(-1);
+
+        ValidFor range = decider.FindRanges().ShouldHaveSingleItem();
+        range.From.ShouldBe(1);
+        range.To!.Value.ShouldBeInRange(44, 45);
+    }
+
+    [Fact]
+    public void Two_givens_are_shown_over_every_pair_in_their_ranges()
+    {
+        Decider decider = NewDecider();
+        Angle a = Angle.Given("latitude", 40, 30, 50);
+        Real r = Real.Given("radius", 80, 60, 100);
+
+        Decision decision = decider.Recording(() => decider.Decide(Real.Sqrt(r * r - r * r * a.Sine * a.Sine) - r * a.Cosine));
+
+        decision.IsZero.ShouldBeTrue();
+        decision.Verdict.Certainty.ShouldBe(Certainty.CertainForEvery);
+        decision.Verdict.Size.ShouldBeGreaterThanOrEqualTo(120);
+        decider.FindRanges().ShouldBe([new ValidFor("radius", false, 60, 100), new ValidFor("latitude", true, 30, 50)], ignoreOrder: true);
+    }
+
+    private static Decider NewDecider() => new(new DeciderOptions());
+
+    [Fact]
+    public void Numbers_of_very_many_digits_are_refused_not_awaited()
+    {
+        Real x = new Rational(3, 7);
+        for (int i = 0; i < 40; i++)
+            x = x * x + new Rational(1, 3);
+        Real y = Real.Sqrt(x) - Real.Sqrt(x + 1) + Real.One / (Real.Sqrt(x) + Real.Sqrt(x + 1));
+
+        Should.Throw<UndecidedException>(() => new Decider(new DeciderOptions(MaximumBits: 4096, TimeLimit: TimeSpan.FromSeconds(5))).Decide(y));
+    }
+
+    [Fact]
+    public void A_hidden_zero_divisor_is_told()
+    {
+        Real zero = Real.Sqrt(5 + 2 * Real.Sqrt(6)) - Real.Sqrt(2) - Real.Sqrt(3);
+
+        Should.Throw<UndecidedException>(() => decider.Decide(1 / zero)).Message.ShouldBe("a divisor is exactly 0");
+        Should.Throw<DivideByZeroException>(() => Real.One / Real.Zero);
+    }
 }

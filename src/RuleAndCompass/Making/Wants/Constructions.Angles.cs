@@ -82,10 +82,11 @@ internal sealed partial class Constructions
     // How far the room goes on that way, at most a third of it: a long base, still well on the stock.
     private double Reach(Point from, double dx, double dy)
     {
-        double across = dx > 0 ? (room.Width.ToDouble() / 2) - from.XMillimetres : (room.Width.ToDouble() / 2) + from.XMillimetres;
-        double up = dy > 0 ? (room.Height.ToDouble() / 2) - from.YMillimetres : (room.Height.ToDouble() / 2) + from.YMillimetres;
+        double across = dx > 0 ? (room.Width.ToDouble() / 2) - from.X.Near() : (room.Width.ToDouble() / 2) + from.X.Near();
+        double up = dy > 0 ? (room.Height.ToDouble() / 2) - from.Y.Near() : (room.Height.ToDouble() / 2) + from.Y.Near();
         double reach = Math.Min(Math.Abs(dx) < 1e-9 ? double.MaxValue : across / Math.Abs(dx), Math.Abs(dy) < 1e-9 ? double.MaxValue : up / Math.Abs(dy));
-        return Math.Clamp(reach * 0.8, 10, Math.Max(10, Diagonal / 2));
+        double longest = Math.Min(Diagonal / 2, (Kit.Straightedge?.ToDouble() ?? double.MaxValue) * 0.9);
+        return Math.Clamp(reach * 0.8, 10, Math.Max(10, longest));
     }
 
     private static Vector Unscaled(Angle direction)

@@ -145,7 +145,7 @@ internal sealed partial class Constructions
         double dx = whole.X.ToDouble(), dy = whole.Y.ToDouble(), length = Math.Sqrt((dx * dx) + (dy * dy));
         double reach = Math.Min(length, Diagonal / 3);
         // Turned by about 40° towards the middle of the stock, in whole millimetres.
-        double side = (dx * -from.Point.YMillimetres) - (dy * -from.Point.XMillimetres) >= 0 ? 1 : -1;
+        double side = (dx * -from.Point.Y.Near()) - (dy * -from.Point.X.Near()) >= 0 ? 1 : -1;
         double turn = side * 40 * Math.PI / 180;
         double x = Math.Round(reach * ((dx * Math.Cos(turn)) - (dy * Math.Sin(turn))) / length), y = Math.Round(reach * ((dx * Math.Sin(turn)) + (dy * Math.Cos(turn))) / length);
         Point aim = from.Point.Plus(new(Rational.FromDouble(x), Rational.FromDouble(y)));

@@ -200,7 +200,7 @@ internal sealed partial class Constructions
         double length = line.DirectionLength.ToDouble();
         double dx = line.Direction.X.ToDouble() / length, dy = line.Direction.Y.ToDouble() / length;
         double offset = line.SideOf(from).ToDouble() / length;
-        double footX = from.XMillimetres + (offset * dy), footY = from.YMillimetres - (offset * dx);
+        double footX = from.X.Near() + (offset * dy), footY = from.Y.Near() - (offset * dx);
         (FreeOpening Opening, int Across, int Onward) best = default;
         double least = double.MaxValue;
         foreach (double factor in (ReadOnlySpan<double>)[1.15, 1.25, 1.4, 1.7, 2.2])
@@ -212,7 +212,7 @@ internal sealed partial class Constructions
             {
                 double cost = Outside(footX + (across * reach * dx), footY + (across * reach * dy))
                     + Outside(footX + (((across * reach) + (onward * radius)) * dx), footY + (((across * reach) + (onward * radius)) * dy))
-                    + Outside(from.XMillimetres + (onward * radius * dx), from.YMillimetres + (onward * radius * dy))
+                    + Outside(from.X.Near() + (onward * radius * dx), from.Y.Near() + (onward * radius * dy))
                     - slant;
                 if (cost < least)
                     (least, best) = (cost, (opening, across, onward));

@@ -12,7 +12,8 @@ namespace RuleAndCompass.Making.Wants;
 /// </summary>
 /// <param name="bench">Where the acts are done.</param>
 /// <param name="room">How far the stock or the board reaches.</param>
-internal sealed partial class Constructions(Workbench bench, Sheet room)
+/// <param name="sheet">The stock, by whose size openings and bases are chosen.</param>
+internal sealed partial class Constructions(Workbench bench, Sheet room, Sheet sheet)
 {
     private Kit Kit => bench.Kit;
 
@@ -21,7 +22,7 @@ internal sealed partial class Constructions(Workbench bench, Sheet room)
     /// <summary>The sentence at hand, for findings.</summary>
     public SourceSpan Serving { get; set; }
 
-    private double Diagonal => Math.Sqrt(Math.Pow(room.Width.ToDouble(), 2) + Math.Pow(room.Height.ToDouble(), 2));
+    private double Diagonal => Math.Sqrt(Math.Pow(sheet.Width.ToDouble(), 2) + Math.Pow(sheet.Height.ToDouble(), 2));
 
     /// <summary>A whole number of millimetres near the one that suits, and within the dividers' reach.</summary>
     private FreeOpening Free(double suitsMillimetres, double leastMillimetres = 1)
@@ -60,7 +61,7 @@ internal sealed partial class Constructions(Workbench bench, Sheet room)
         if (crossing.Points.Length < 2)
             return "";
         Point here = crossing.Points[which], other = crossing.Points[1 - which];
-        double dx = here.XMillimetres - other.XMillimetres, dy = here.YMillimetres - other.YMillimetres;
+        double dx = here.X.Near() - other.X.Near(), dy = here.Y.Near() - other.Y.Near();
         return Math.Abs(dy) >= Math.Abs(dx) ? (dy > 0 ? ", the upper one" : ", the lower one") : dx > 0 ? ", the one on the right" : ", the one on the left";
     }
 
@@ -94,7 +95,7 @@ internal sealed partial class Constructions(Workbench bench, Sheet room)
 
     private static double Apart(Point a, Point b)
     {
-        double dx = a.XMillimetres - b.XMillimetres, dy = a.YMillimetres - b.YMillimetres;
+        double dx = a.X.Near() - b.X.Near(), dy = a.Y.Near() - b.Y.Near();
         return (dx * dx) + (dy * dy);
     }
 

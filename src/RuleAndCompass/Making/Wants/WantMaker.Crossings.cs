@@ -193,7 +193,7 @@ internal sealed partial class WantMaker
         return line.Directed.IsReversed ? -side : side;
     }
 
-    private static string Place(Point point) => $"({ValueText.Decimals(point.XMillimetres, 3)}, {ValueText.Decimals(point.YMillimetres, 3)}) mm";
+    private static string Place(Point point) => $"({ValueText.Decimals(point.X.Near(), 3)}, {ValueText.Decimals(point.Y.Near(), 3)}) mm";
 
     private static string Figure(Real value) => Figure(Math.Abs(value.ToDouble()));
 
