@@ -1,5 +1,4 @@
 using System.Text.RegularExpressions;
-using RuleAndCompass.Language.Diagnostics;
 using RuleAndCompass.Tests.Making;
 
 namespace RuleAndCompass.Tests;

@@ -113,6 +113,9 @@ internal static class MakingFindings
     public static Diagnostic NotInKit(string tool, SourceSpan span) =>
         Error("RC2039", $"`by {tool}` is asked, and the kit has none", span, $"add `{tool}` to the `kit`, or leave out `by {tool}`");
 
+    public static Diagnostic NoWayBy(string tool, IEnumerable<string> ways, SourceSpan span) =>
+        Error("RC2039", $"`by {tool}` is no way to make this", span, string.Join(" or ", ways.Select(way => $"`by {way}`")) is { Length: > 0 } others ? $"write {others}, or leave it out" : $"leave out `by {tool}`");
+
     public static Diagnostic ActsDoNotProve(string what, SourceSpan span) =>
         Error("RC2040", $"the acts for this sentence could not be proved to make {what}", span, "please tell the developers; no figure from it can be trusted");
 

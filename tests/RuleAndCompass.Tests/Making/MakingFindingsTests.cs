@@ -53,6 +53,7 @@ public sealed class MakingFindingsTests
     {
         var type when type == typeof(string) => "wort",
         var type when type == typeof(Verdict) => new Verdict(Certainty.Digits, 50, []),
+        var type when type == typeof(IEnumerable<string>) => (string[])["dividers"],
         _ => new SourceSpan(0, 1),
     };
 }

@@ -168,6 +168,19 @@ public sealed class WantTests
     }
 
     [Theory]
+    [InlineData("rule t through A, B by square")]
+    [InlineData("rule t halving A to B by scale")]
+    [InlineData("strike k about A opening 17 mm by protractor")]
+    [InlineData("rule t through B parallel to l by protractor")]
+    public void A_tool_that_is_no_way_to_make_it_is_an_error(string want)
+    {
+        Diagnostic finding = Layouts.Finding(Figures + want);
+
+        finding.Code.ShouldBe("RC2039");
+        finding.Message.ShouldEndWith("is no way to make this");
+    }
+
+    [Theory]
     [InlineData("rule t through B square to l by square", typeof(Slide))]
     [InlineData("rule t through A square to l by protractor", typeof(Protract))]
     [InlineData("rule t through O turned 60° from l clockwise by protractor", typeof(Protract))]
@@ -177,6 +190,7 @@ public sealed class WantTests
     }
 
     [Theory]
+    [InlineData("prick P opposite B across l by dividers")]
     [InlineData("rule t through B square to l by dividers")]
     [InlineData("rule t through O turned 60° from l clockwise by dividers")]
     [InlineData("rule t through O turned 43°18' from l clockwise by scale")]

@@ -44,6 +44,7 @@ public sealed class ChordTests
             """);
 
         figure.Check(layout.Constructed($"chord of {arc}°"));
+        layout.Comparison($"chord of {arc}°").Decision.IsZero.ShouldBeTrue();
     }
 
     // T. L. Heath (1921), as above: no entry is out by more than one unit of its last place, 1/3600 of a part.

@@ -13,15 +13,27 @@ public sealed class EveryLatitudeTests
     [MemberData(nameof(Recipes))]
     public void Each_hour_line_is_decided_equal_to_the_formula(string recipe)
     {
-        for (int latitude = 1; latitude <= 89; latitude++)
+        // Each latitude takes one quarter of each hour, its neighbours the others.
+        for (int latitude = -89; latitude <= 89; latitude++)
         {
-            foreach (int signed in (int[])[latitude, -latitude])
-            {
-                Layout dial = HorizontalDialTests.Dial(recipe, $"{signed}°", step: "1/4");
-
-                dial.Comparisons.Count(comparison => comparison.Label.EndsWith("o'clock", StringComparison.Ordinal)).ShouldBe(41);
-                dial.Comparisons.Where(comparison => !comparison.Decision.IsZero).Select(comparison => comparison.Label).ShouldBeEmpty($"{recipe}, latitude {signed}°");
-            }
+            if (latitude != 0)
+                AllDecided(recipe, latitude, first: $"-5 + {(latitude + 89) % 4} / 4", step: "1", hours: (latitude + 89) % 4 == 0 ? 11 : 10);
         }
+    }
+
+    [Theory]
+    [MemberData(nameof(Recipes))]
+    public void Each_quarter_of_an_hour_is_decided_equal_to_the_formula(string recipe)
+    {
+        foreach (int latitude in (int[])[-89, -45, -1, 1, 30, 52, 89])
+            AllDecided(recipe, latitude, first: "-5", step: "1/4", hours: 41);
+    }
+
+    private static void AllDecided(string recipe, int latitude, string first, string step, int hours)
+    {
+        Layout dial = HorizontalDialTests.Dial(recipe, $"{latitude}°", first: first, step: step);
+
+        dial.Comparisons.Count(comparison => comparison.Label.EndsWith("o'clock", StringComparison.Ordinal)).ShouldBe(hours);
+        dial.Comparisons.Where(comparison => !comparison.Decision.IsZero).Select(comparison => comparison.Label).ShouldBeEmpty($"{recipe}, latitude {latitude}°");
     }
 }

@@ -79,8 +79,8 @@ public sealed class NearConstructionTests
             prick B where upright meets ring, ahead of O
             strike sixth about B through O
             prick I, J where ring meets sixth
-            strike petal[1] about J through O
-            strike petal[2] about I through O
+            strike petal[1] about I through O
+            strike petal[2] about J through O
             prick third[0 to 3] dividing O to B
             rule  bar through third[1] square to upright
             prick E where bar meets petal[1], right along upright

@@ -96,7 +96,7 @@ internal sealed partial class Constructions
     }
 
     /// <summary>The mirror image of a mark in a line.</summary>
-    public PointMark Mirror(PointMark of, DirectedLine across, string? name)
+    public PointMark Mirror(PointMark of, DirectedLine across, string? name, ByTool? by = null)
     {
         if (Holds(across.Mark.Line, of))
             return of;
@@ -105,7 +105,7 @@ internal sealed partial class Constructions
             return standing;
         if (!HasDividers)
             throw NoTool("a mirror image", "`dividers`");
-        if (Kit.Square)
+        if (Kit.Square && by is null)
         {
             DirectedLine plumb = bench.Slide(across, of, null);
             PointMark foot = Crossed(plumb, across);

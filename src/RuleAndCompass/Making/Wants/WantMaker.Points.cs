@@ -31,7 +31,7 @@ internal sealed partial class WantMaker
     }
 
     private void Make(PrickAcross want) =>
-        Bind(want.Point, constructions.Mirror(evaluator.Point(want.Of).Mark, Directed(evaluator.Line(want.Across)), evaluator.NameOf(want.Point)));
+        Bind(want.Point, constructions.Mirror(evaluator.Point(want.Of).Mark, Directed(evaluator.Line(want.Across)), evaluator.NameOf(want.Point), want.By));
 
     private void Make(PrickAbout want)
     {

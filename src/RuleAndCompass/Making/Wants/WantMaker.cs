@@ -14,6 +14,8 @@ internal sealed partial class WantMaker(Evaluator evaluator, Workbench bench, Co
     public void Make(WantSentence want)
     {
         constructions.Serving = want.Span;
+        if (want.By is { } tool && !WaysOf(want).Contains(tool))
+            throw new FaultException(MakingFindings.NoWayBy(tool.ToString().ToLowerInvariant(), WaysOf(want).Select(way => way.ToString().ToLowerInvariant()), want.Span));
         if (want.By is { } by && !Serves(by, want))
             throw new FaultException(MakingFindings.NoTool($"`by {by.ToString().ToLowerInvariant()}` is no way to make it", "nothing: leave `by` out, or name another tool", want.Span) with
             {
@@ -130,6 +132,19 @@ internal sealed partial class WantMaker(Evaluator evaluator, Workbench bench, Co
         PrickOnCircle => by is ByTool.Square or ByTool.Dividers,
         RuleThrough => false,
         _ => by == ByTool.Dividers,
+    };
+
+    // What a want may be asked to be made by.
+    private static ByTool[] WaysOf(WantSentence want) => want switch
+    {
+        PrickAt => [ByTool.Scale],
+        PrickOnToward or PrickOnAhead => [ByTool.Dividers, ByTool.Scale],
+        PrickMidway or PrickAcross or PrickAbout or PrickDividing or PrickSteppingAlong or PrickSteppingRound or RuleHalving or RuleHalvingAngle => [ByTool.Dividers],
+        PrickFoot or RuleSquare or RuleTouchingAt or StrikeTouching => [ByTool.Square, ByTool.Dividers, ByTool.Protractor],
+        RuleParallel or RuleBack => [ByTool.Square, ByTool.Dividers],
+        RuleToward or PrickOnCircle => [ByTool.Square, ByTool.Dividers, ByTool.Protractor, ByTool.Scale],
+        RuleTurned or PrickTurned or PrickRound => [ByTool.Dividers, ByTool.Protractor, ByTool.Scale],
+        _ => [],
     };
 
     private void Bind(Bound bound, PointMark mark) => bind(bound, new PointValue(mark));
