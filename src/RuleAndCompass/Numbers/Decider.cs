@@ -83,9 +83,17 @@ public sealed class Decider
         bool asked = line is not null && line.Roots <= FewRoots && !line.HasLeaves;
         if (asked)
         {
-            isZero = DecideZero(x, line, limit, out Verdict? verdict);
-            if (isZero == true)
-                return new Decision(0, verdict!);
+            try
+            {
+                isZero = DecideZero(x, line, limit, out Verdict? verdict);
+                if (isZero == true)
+                    return new Decision(0, verdict!);
+            }
+            catch (UndecidedException)
+            {
+                // A ball may still tell the sign; where none does, the field is asked again and its answer stands.
+                asked = false;
+            }
         }
 
         int bits = FirstBits;
