@@ -1,5 +1,4 @@
 using RuleAndCompass.Making;
-using RuleAndCompass.Tests.Making;
 
 namespace RuleAndCompass.Tests.References;
 
