@@ -12,7 +12,7 @@ internal sealed class FullSizeComposer
 {
     private const double BarLength = 100;
     private const double Margin = 12;
-    private const double StripHeight = 38;
+    private const double StripHeight = 46;
 
     // Printers leave up to 5 mm of the edge blank; bars and words keep a little more.
     private const double KeepOffEdge = 8;

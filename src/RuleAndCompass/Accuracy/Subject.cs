@@ -71,13 +71,13 @@ internal sealed record Subject(
                 yield return Line(kept, index, program, exact, program.SlotOf(line));
                 break;
             case CircleMark circle:
-            {
-                int slot = program.SlotOf(circle);
-                yield return new Subject(
-                    $"{kept.Name} (radius)", HandSubject.Radius, index, QuantityKind.Length, new Quantity(new SlotGauge(slot + 2), exact, false), []);
-                yield return new Subject($"{kept.Name} (centre)", HandSubject.Centre, index, QuantityKind.Point, Place(slot, exact), []);
-                break;
-            }
+                {
+                    int slot = program.SlotOf(circle);
+                    yield return new Subject(
+                        $"{kept.Name} (radius)", HandSubject.Radius, index, QuantityKind.Length, new Quantity(new SlotGauge(slot + 2), exact, false), []);
+                    yield return new Subject($"{kept.Name} (centre)", HandSubject.Centre, index, QuantityKind.Point, Place(slot, exact), []);
+                    break;
+                }
 
             case PointMark point:
                 yield return new Subject(kept.Name, HandSubject.Point, index, QuantityKind.Point, Place(program.SlotOf(point), exact), []);

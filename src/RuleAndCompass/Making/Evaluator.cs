@@ -296,90 +296,90 @@ internal sealed class Evaluator(Decider decider)
         switch (name)
         {
             case "sqrt":
-            {
-                QuantityValue under = Quantity(call.Arguments[0]);
-                if (under.Dimension % 2 != 0)
-                    throw new FaultException(MakingFindings.WrongKind(call.Arguments[0].ToString()!, under.KindWithArticle, "a number or an area", call.Arguments[0].Span, "a length times a length is an area, and its root a length"));
-                if (decider.Sign(under.Amount) < 0)
-                    throw new FaultException(MakingFindings.RootOfNegative(Written(under), call.Arguments[0].Span));
-                return new QuantityValue(Real.Sqrt(under.Amount), under.Dimension / 2, Traced(name, under.Trace));
-            }
-
-            case "sin" or "cos" or "tan":
-            {
-                AngleValue of = AngleValueOf(call.Arguments[0]);
-                return new QuantityValue(Trigonometric(name, of.Angle, call.Arguments[0].Span), 0, Traced(name, of.Trace));
-            }
-
-            case "asin" or "acos":
-            {
-                QuantityValue of = Number(call.Arguments[0]);
-                Real square = 1 - (of.Amount * of.Amount);
-                if (decider.Sign(square) < 0)
-                    throw new FaultException(MakingFindings.OutsideDomain($"`{name}` takes a number from -1 to 1, and this is {Written(of)}", call.Arguments[0].Span, $"no angle has such a {(name == "asin" ? "sine" : "cosine")}; look at the figures it is worked out from"));
-                Real other = Real.Sqrt(square);
-                return new AngleValue(name == "asin" ? Angle.OfVector(other, of.Amount) : Angle.OfVector(of.Amount, other), Traced(name, of.Trace));
-            }
-
-            case "atan" when call.Arguments.Length == 1:
-            {
-                QuantityValue of = Number(call.Arguments[0]);
-                return new AngleValue(Angle.OfVector(1, of.Amount), Traced(name, of.Trace));
-            }
-
-            case "atan":
-            {
-                (QuantityValue y, QuantityValue x) = OneKind(call, 0, 1);
-                if (decider.IsZero(y.Amount) && decider.IsZero(x.Amount))
-                    throw new FaultException(MakingFindings.OutsideDomain("`atan` of nothing and nothing is no angle", call.Span, "one of its two values must be more or less than nothing"));
-                return new AngleValue(Angle.OfVector(x.Amount, y.Amount), Traced(name, y, x));
-            }
-
-            case "abs":
-            {
-                Value of = Evaluate(call.Arguments[0]);
-                if (of is AngleValue angle)
-                    return decider.Recording(() => decider.Sign(angle.Angle.Degrees)) < 0 ? new AngleValue(-angle.Angle, Traced("-", angle.Trace)) : angle;
-                QuantityValue quantity = Quantity(call.Arguments[0]);
-                return decider.Recording(() => decider.Sign(quantity.Amount)) < 0 ? new QuantityValue(-quantity.Amount, quantity.Dimension, Traced("-", quantity.Trace)) : quantity;
-            }
-
-            case "min" or "max":
-            {
-                return call.Arguments.Select(Evaluate).Aggregate((best, next) => IsLess(next, best, call) == (name == "min") ? next : best);
-            }
-
-            case "whole":
-            {
-                QuantityValue of = Number(call.Arguments[0]);
-                return new QuantityValue(Floor(of.Amount, call.Span), 0);
-            }
-
-            case "remainder":
-            {
-                if (Evaluate(call.Arguments[0]) is AngleValue turned)
                 {
-                    AngleValue part = AngleValueOf(call.Arguments[1]);
-                    NotZero(part.Angle.Degrees, call.Arguments[1].Span);
-                    return new AngleValue(turned.Angle - (Floor(turned.Angle.Degrees / part.Angle.Degrees, call.Span) * part.Angle), turned.Trace);
+                    QuantityValue under = Quantity(call.Arguments[0]);
+                    if (under.Dimension % 2 != 0)
+                        throw new FaultException(MakingFindings.WrongKind(call.Arguments[0].ToString()!, under.KindWithArticle, "a number or an area", call.Arguments[0].Span, "a length times a length is an area, and its root a length"));
+                    if (decider.Sign(under.Amount) < 0)
+                        throw new FaultException(MakingFindings.RootOfNegative(Written(under), call.Arguments[0].Span));
+                    return new QuantityValue(Real.Sqrt(under.Amount), under.Dimension / 2, Traced(name, under.Trace));
                 }
 
-                (QuantityValue of, QuantityValue by) = OneKind(call, 0, 1);
-                NotZero(by.Amount, call.Arguments[1].Span);
-                Rational times = Floor(of.Amount / by.Amount, call.Span);
-                return new QuantityValue(of.Amount - (times * by.Amount), of.Dimension, of.Trace);
-            }
+            case "sin" or "cos" or "tan":
+                {
+                    AngleValue of = AngleValueOf(call.Arguments[0]);
+                    return new QuantityValue(Trigonometric(name, of.Angle, call.Arguments[0].Span), 0, Traced(name, of.Trace));
+                }
+
+            case "asin" or "acos":
+                {
+                    QuantityValue of = Number(call.Arguments[0]);
+                    Real square = 1 - (of.Amount * of.Amount);
+                    if (decider.Sign(square) < 0)
+                        throw new FaultException(MakingFindings.OutsideDomain($"`{name}` takes a number from -1 to 1, and this is {Written(of)}", call.Arguments[0].Span, $"no angle has such a {(name == "asin" ? "sine" : "cosine")}; look at the figures it is worked out from"));
+                    Real other = Real.Sqrt(square);
+                    return new AngleValue(name == "asin" ? Angle.OfVector(other, of.Amount) : Angle.OfVector(of.Amount, other), Traced(name, of.Trace));
+                }
+
+            case "atan" when call.Arguments.Length == 1:
+                {
+                    QuantityValue of = Number(call.Arguments[0]);
+                    return new AngleValue(Angle.OfVector(1, of.Amount), Traced(name, of.Trace));
+                }
+
+            case "atan":
+                {
+                    (QuantityValue y, QuantityValue x) = OneKind(call, 0, 1);
+                    if (decider.IsZero(y.Amount) && decider.IsZero(x.Amount))
+                        throw new FaultException(MakingFindings.OutsideDomain("`atan` of nothing and nothing is no angle", call.Span, "one of its two values must be more or less than nothing"));
+                    return new AngleValue(Angle.OfVector(x.Amount, y.Amount), Traced(name, y, x));
+                }
+
+            case "abs":
+                {
+                    Value of = Evaluate(call.Arguments[0]);
+                    if (of is AngleValue angle)
+                        return decider.Recording(() => decider.Sign(angle.Angle.Degrees)) < 0 ? new AngleValue(-angle.Angle, Traced("-", angle.Trace)) : angle;
+                    QuantityValue quantity = Quantity(call.Arguments[0]);
+                    return decider.Recording(() => decider.Sign(quantity.Amount)) < 0 ? new QuantityValue(-quantity.Amount, quantity.Dimension, Traced("-", quantity.Trace)) : quantity;
+                }
+
+            case "min" or "max":
+                {
+                    return call.Arguments.Select(Evaluate).Aggregate((best, next) => IsLess(next, best, call) == (name == "min") ? next : best);
+                }
+
+            case "whole":
+                {
+                    QuantityValue of = Number(call.Arguments[0]);
+                    return new QuantityValue(Floor(of.Amount, call.Span), 0);
+                }
+
+            case "remainder":
+                {
+                    if (Evaluate(call.Arguments[0]) is AngleValue turned)
+                    {
+                        AngleValue part = AngleValueOf(call.Arguments[1]);
+                        NotZero(part.Angle.Degrees, call.Arguments[1].Span);
+                        return new AngleValue(turned.Angle - (Floor(turned.Angle.Degrees / part.Angle.Degrees, call.Span) * part.Angle), turned.Trace);
+                    }
+
+                    (QuantityValue of, QuantityValue by) = OneKind(call, 0, 1);
+                    NotZero(by.Amount, call.Arguments[1].Span);
+                    Rational times = Floor(of.Amount / by.Amount, call.Span);
+                    return new QuantityValue(of.Amount - (times * by.Amount), of.Dimension, of.Trace);
+                }
 
             case "declination" or "sun_correction":
-            {
-                int month = Whole(call.Arguments[0]), day = Whole(call.Arguments[1]);
-                int? year = call.Arguments.Length == 3 ? Whole(call.Arguments[2]) : null;
-                if (year is < 1800 or > 2200)
-                    throw new FaultException(MakingFindings.OutsideDomain($"the sun's series is good from 1800 to 2200, and this is {year}", call.Arguments[2].Span, "leave the year out for the mean of the years about now"));
-                if (!Sun.IsDay(month, day, year))
-                    throw new FaultException(MakingFindings.OutsideDomain(month is < 1 or > 12 ? $"there is no month {month}" : $"month {month} has no day {day}", call.Span, "the month comes first, then the day: `declination(6, 21)`"));
-                return new AngleValue(Angle.FromDegrees(name == "declination" ? Sun.Declination(month, day, year) : Sun.Correction(month, day, year)));
-            }
+                {
+                    int month = Whole(call.Arguments[0]), day = Whole(call.Arguments[1]);
+                    int? year = call.Arguments.Length == 3 ? Whole(call.Arguments[2]) : null;
+                    if (year is < 1800 or > 2200)
+                        throw new FaultException(MakingFindings.OutsideDomain($"the sun's series is good from 1800 to 2200, and this is {year}", call.Arguments[2].Span, "leave the year out for the mean of the years about now"));
+                    if (!Sun.IsDay(month, day, year))
+                        throw new FaultException(MakingFindings.OutsideDomain(month is < 1 or > 12 ? $"there is no month {month}" : $"month {month} has no day {day}", call.Span, "the month comes first, then the day: `declination(6, 21)`"));
+                    return new AngleValue(Angle.FromDegrees(name == "declination" ? Sun.Declination(month, day, year) : Sun.Correction(month, day, year)));
+                }
 
             default:
                 throw new UnreachableException($"No function {name}: the reader knows them all.");

@@ -94,7 +94,8 @@ internal static class HandErrorBenchmark
 
         return new Layout(
             new Script("walk", "", []), "walk", [], new Sheet(null, 420, 297), null, new Kit(true, null, null, null, false, false, null), Hand.Ordinary, [],
-            [new Stage("1", "All")], [.. acts], [], [.. comparisons], [], [], false) { Decider = decider };
+            [new Stage("1", "All")], [.. acts], [], [.. comparisons], [], [], false)
+        { Decider = decider };
     }
 
     private static Comparison Compared(string label, Measure measure) => new(

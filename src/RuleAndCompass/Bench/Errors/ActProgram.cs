@@ -95,32 +95,32 @@ internal sealed class ActProgram
         switch (act)
         {
             case Locate locate:
-            {
-                double x = locate.Point.Point.XMillimetres;
-                double y = locate.Point.Point.YMillimetres;
-                int from = locate.From is { } measuredFrom ? Slot(act, measuredFrom) : -1;
-                slot = AddSlots(x, y);
-                if (from >= 0)
                 {
-                    x -= nominal[from];
-                    y -= nominal[from + 1];
+                    double x = locate.Point.Point.XMillimetres;
+                    double y = locate.Point.Point.YMillimetres;
+                    int from = locate.From is { } measuredFrom ? Slot(act, measuredFrom) : -1;
+                    slot = AddSlots(x, y);
+                    if (from >= 0)
+                    {
+                        x -= nominal[from];
+                        y -= nominal[from + 1];
+                    }
+
+                    int prick = AddVariables(act.Number, (ErrorSource.Prick, hand.PrickMillimetres), (ErrorSource.Prick, hand.PrickMillimetres));
+                    int? scale = locate.ByScale
+                        ? AddVariables(act.Number, (ErrorSource.Scale, hand.ScaleMillimetres), (ErrorSource.Scale, hand.ScaleMillimetres))
+                        : null;
+                    return new LocateStep(act.Number, slot, x, y, from, prick, scale);
                 }
 
-                int prick = AddVariables(act.Number, (ErrorSource.Prick, hand.PrickMillimetres), (ErrorSource.Prick, hand.PrickMillimetres));
-                int? scale = locate.ByScale
-                    ? AddVariables(act.Number, (ErrorSource.Scale, hand.ScaleMillimetres), (ErrorSource.Scale, hand.ScaleMillimetres))
-                    : null;
-                return new LocateStep(act.Number, slot, x, y, from, prick, scale);
-            }
-
             case Lay lay:
-            {
-                int first = Slot(act, lay.First);
-                int second = Slot(act, lay.Second);
-                slot = AddLine(lay.Line, first);
-                int edge = AddVariables(act.Number, (ErrorSource.Edge, hand.EdgeMillimetres), (ErrorSource.Edge, hand.EdgeMillimetres));
-                return new LayStep(act.Number, slot, first, second, edge);
-            }
+                {
+                    int first = Slot(act, lay.First);
+                    int second = Slot(act, lay.Second);
+                    slot = AddLine(lay.Line, first);
+                    int edge = AddVariables(act.Number, (ErrorSource.Edge, hand.EdgeMillimetres), (ErrorSource.Edge, hand.EdgeMillimetres));
+                    return new LayStep(act.Number, slot, first, second, edge);
+                }
 
             case Protract protract:
                 return CompileTurn(
@@ -133,13 +133,13 @@ internal sealed class ActProgram
                 return CompileSetting(set, out slot);
 
             case Swing swing:
-            {
-                int centre = Slot(act, swing.Centre);
-                int opening = Slot(act, swing.Setting);
-                slot = AddSlots(nominal[centre], nominal[centre + 1], nominal[opening]);
-                int prick = AddVariables(act.Number, (ErrorSource.Prick, hand.PrickMillimetres), (ErrorSource.Prick, hand.PrickMillimetres));
-                return new SwingStep(act.Number, slot, centre, opening, prick);
-            }
+                {
+                    int centre = Slot(act, swing.Centre);
+                    int opening = Slot(act, swing.Setting);
+                    slot = AddSlots(nominal[centre], nominal[centre + 1], nominal[opening]);
+                    int prick = AddVariables(act.Number, (ErrorSource.Prick, hand.PrickMillimetres), (ErrorSource.Prick, hand.PrickMillimetres));
+                    return new SwingStep(act.Number, slot, centre, opening, prick);
+                }
 
             case Cross cross:
                 return CompileCross(cross, out slot);
@@ -225,4 +225,5 @@ internal sealed class ActProgram
         variables.Add(new ErrorVariable(first.Source, act, first.Sigma));
         variables.Add(new ErrorVariable(second.Source, act, second.Sigma));
         return variable;
-    }}
+    }
+}

@@ -30,19 +30,49 @@ public static class Vocabulary
     /// <summary>What people write for a unit, and what it is here.</summary>
     internal static FrozenDictionary<string, string> UnitHabits { get; } = new Dictionary<string, string>
     {
-        ["millimetre"] = "mm", ["millimetres"] = "mm", ["millimeter"] = "mm", ["millimeters"] = "mm", ["MM"] = "mm",
-        ["centimetre"] = "cm", ["centimetres"] = "cm", ["centimeter"] = "cm", ["centimeters"] = "cm", ["CM"] = "cm",
-        ["metre"] = "m", ["metres"] = "m", ["meter"] = "m", ["meters"] = "m", ["M"] = "m",
-        ["inch"] = "in", ["inches"] = "in", ["ins"] = "in", ["foot"] = "ft", ["feet"] = "ft",
-        ["degree"] = "deg", ["degrees"] = "deg", ["degs"] = "deg", ["turns"] = "turn",
+        ["millimetre"] = "mm",
+        ["millimetres"] = "mm",
+        ["millimeter"] = "mm",
+        ["millimeters"] = "mm",
+        ["MM"] = "mm",
+        ["centimetre"] = "cm",
+        ["centimetres"] = "cm",
+        ["centimeter"] = "cm",
+        ["centimeters"] = "cm",
+        ["CM"] = "cm",
+        ["metre"] = "m",
+        ["metres"] = "m",
+        ["meter"] = "m",
+        ["meters"] = "m",
+        ["M"] = "m",
+        ["inch"] = "in",
+        ["inches"] = "in",
+        ["ins"] = "in",
+        ["foot"] = "ft",
+        ["feet"] = "ft",
+        ["degree"] = "deg",
+        ["degrees"] = "deg",
+        ["degs"] = "deg",
+        ["turns"] = "turn",
     }.ToFrozenDictionary();
 
     /// <summary>The functions, with the least and greatest count of values each takes.</summary>
     internal static FrozenDictionary<string, (int Least, int Most)> FunctionArguments { get; } = new Dictionary<string, (int, int)>
     {
-        ["sqrt"] = (1, 1), ["sin"] = (1, 1), ["cos"] = (1, 1), ["tan"] = (1, 1), ["asin"] = (1, 1), ["acos"] = (1, 1), ["atan"] = (1, 2),
-        ["abs"] = (1, 1), ["min"] = (2, int.MaxValue), ["max"] = (2, int.MaxValue), ["whole"] = (1, 1), ["remainder"] = (2, 2),
-        ["declination"] = (2, 3), ["sun_correction"] = (2, 3),
+        ["sqrt"] = (1, 1),
+        ["sin"] = (1, 1),
+        ["cos"] = (1, 1),
+        ["tan"] = (1, 1),
+        ["asin"] = (1, 1),
+        ["acos"] = (1, 1),
+        ["atan"] = (1, 2),
+        ["abs"] = (1, 1),
+        ["min"] = (2, int.MaxValue),
+        ["max"] = (2, int.MaxValue),
+        ["whole"] = (1, 1),
+        ["remainder"] = (2, 2),
+        ["declination"] = (2, 3),
+        ["sun_correction"] = (2, 3),
     }.ToFrozenDictionary();
 
     /// <summary>The functions by name.</summary>
