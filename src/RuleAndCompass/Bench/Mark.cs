@@ -28,13 +28,20 @@ public sealed class PointMark(string name, Point point, bool isAuxiliary) : Mark
 }
 
 /// <summary>A line or a circle that stands on the stock.</summary>
-public abstract class CurveMark(string name, bool isAuxiliary) : Mark(name, isAuxiliary);
+public abstract class CurveMark(string name, bool isAuxiliary) : Mark(name, isAuxiliary)
+{
+    /// <inheritdoc/>
+    public sealed override Figure Figure => Curve;
+
+    /// <summary>Where it runs.</summary>
+    public abstract Curve Curve { get; }
+}
 
 /// <summary>A drawn line, in the direction of the act that made it.</summary>
 public sealed class LineMark(string name, Line line, bool isAuxiliary) : CurveMark(name, isAuxiliary)
 {
     /// <inheritdoc/>
-    public override Figure Figure => Line;
+    public override Curve Curve => Line;
 
     /// <summary>Where it runs.</summary>
     public Line Line { get; } = line;
@@ -44,7 +51,7 @@ public sealed class LineMark(string name, Line line, bool isAuxiliary) : CurveMa
 public sealed class CircleMark(string name, Circle circle, bool isAuxiliary) : CurveMark(name, isAuxiliary)
 {
     /// <inheritdoc/>
-    public override Figure Figure => Circle;
+    public override Curve Curve => Circle;
 
     /// <summary>Where it runs.</summary>
     public Circle Circle { get; } = circle;

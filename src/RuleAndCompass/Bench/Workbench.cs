@@ -149,7 +149,7 @@ internal sealed class Workbench(Kit kit, Decider decider, IReadOnlySet<string> u
     {
         if (index.Find(at) is { } standing)
             return standing;
-        Point point = new(at.X, at.Y, [(Curve)first.Figure, (Curve)second.Figure]);
+        Point point = new(at.X, at.Y, [first.Curve, second.Curve]);
         PointMark made = new(name ?? Generate('p'), point, name is null);
         string says = $"Prick {made.Name} where {first.Name} crosses {second.Name}{where}.";
         return Done(made, new Cross(Next(), stage, want, made, first, second, which, says, span, file));
@@ -162,9 +162,6 @@ internal sealed class Workbench(Kit kit, Decider decider, IReadOnlySet<string> u
             return null;
         return new(mark, Vector.Dot(mark.Line.Direction, line.Direction) is var along && decider.Sign(along) < 0);
     }
-
-    /// <summary>The opening that stands in the dividers, where one does.</summary>
-    public Opening? DividersStand => dividersStand?.Opening;
 
     private bool NeedsBeam(double millimetres) =>
         kit.Beam is not null && (kit.Dividers is not { } dividers || millimetres > dividers.Greatest.ToDouble());

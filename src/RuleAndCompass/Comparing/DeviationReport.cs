@@ -61,9 +61,6 @@ public sealed record DeviationReport(
             [.. CautionsOf(layout)]);
     }
 
-    /// <summary>Whether anything in it is out of tolerance or refuted.</summary>
-    public bool HasFault => Comparisons.Any(row => !row.IsInTolerance) || Claims.Any(row => row.Holds == false);
-
     private static IEnumerable<HeadRow> HeadOf(Layout layout)
     {
         foreach (GivenValue given in layout.Givens)

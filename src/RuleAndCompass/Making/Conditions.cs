@@ -11,8 +11,15 @@ namespace RuleAndCompass.Making;
 /// <summary>Decides what is claimed, and what `when` asks.</summary>
 internal sealed class Conditions(Evaluator evaluator, Decider decider)
 {
+    private string? byHowMuch;
+    private (Real Size, string Unit)? told;
+
     /// <summary>After a test that failed: by how much, in words; null where there is no size to tell.</summary>
-    public string? ByHowMuch { get; private set; }
+    public string? ByHowMuch
+    {
+        get => byHowMuch ?? (told is { } difference ? $"the difference is {Figure(difference.Size)}{difference.Unit}" : null);
+        private set => (byHowMuch, told) = (value, null);
+    }
 
     /// <summary>The condition with its indices worked out.</summary>
     public string Says(Condition condition) => (condition with { Tests = [.. condition.Tests.Select(Labelled)] }).ToString();
@@ -210,8 +217,8 @@ internal sealed class Conditions(Evaluator evaluator, Decider decider)
                 return Touches(line.Directed.Mark.Line, circle.Mark.Circle);
             case (FigureRelation.Touches, CircleValue a, CircleValue b):
                 return Touches(a.Mark.Circle, b.Mark.Circle);
-            case (FigureRelation.Meets, LineValue or CircleValue, LineValue or CircleValue):
-                return Meets(CurveOf(left), CurveOf(right));
+            case (FigureRelation.Meets, CurveValue a, CurveValue b):
+                return Meets(a.CurveMark.Curve, b.CurveMark.Curve);
             default:
                 throw new FaultException(MakingFindings.KindsDoNotFit(left.KindWithArticle, test.Relation switch
                 {
@@ -406,7 +413,8 @@ internal sealed class Conditions(Evaluator evaluator, Decider decider)
         return (a.Verdict.IsDecided && b.Verdict.IsDecided ? true : null, Weaker(a.Verdict, b.Verdict));
     }
 
-    private void Tell(Real difference, string unit) => ByHowMuch = $"the difference is {Figure(difference)}{unit}";
+    // Put into words only when someone asks: most conditions hold, and nobody does.
+    private void Tell(Real difference, string unit) => (byHowMuch, told) = (null, (difference, unit));
 
     private static string Figure(Real value, bool size = false) => Figure(value.ToDouble(), size);
 
@@ -416,13 +424,6 @@ internal sealed class Conditions(Evaluator evaluator, Decider decider)
             ? ValueText.Decimals(size ? Math.Abs(approximate) : approximate, 6)
             : scientific;
     }
-
-    private static Curve CurveOf(Value value) => value switch
-    {
-        LineValue line => line.Directed.Mark.Line,
-        CircleValue circle => circle.Mark.Circle,
-        _ => throw new UnreachableException(),
-    };
 
     private Test Labelled(Test test) => test switch
     {

@@ -268,8 +268,7 @@ internal sealed class Keeping(Evaluator evaluator, Decider decider)
 
     private Curve CurveOf(Reference reference) => evaluator.Resolve(reference) switch
     {
-        LineValue line => line.Directed.Mark.Line,
-        CircleValue circle => circle.Mark.Circle,
+        CurveValue curve => curve.CurveMark.Curve,
         Value other => throw new FaultException(MakingFindings.WrongKind(reference.ToString()!, other.KindWithArticle, "a line or a circle", reference.Span)),
     };
 

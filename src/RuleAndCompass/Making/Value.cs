@@ -64,9 +64,17 @@ internal sealed class PointValue(PointMark mark) : Value
     public override string KindWithArticle => "a point";
 }
 
-/// <summary>A line, with the way and the start that its name gives it.</summary>
-internal sealed class LineValue(DirectedLine directed, Point start) : Value
+/// <summary>A line or a circle.</summary>
+internal abstract class CurveValue : Value
 {
+    public abstract CurveMark CurveMark { get; }
+}
+
+/// <summary>A line, with the way and the start that its name gives it.</summary>
+internal sealed class LineValue(DirectedLine directed, Point start) : CurveValue
+{
+    public override CurveMark CurveMark => Directed.Mark;
+
     public DirectedLine Directed { get; } = directed;
 
     public Point Start { get; } = start;
@@ -77,8 +85,10 @@ internal sealed class LineValue(DirectedLine directed, Point start) : Value
 }
 
 /// <summary>A circle.</summary>
-internal sealed class CircleValue(CircleMark mark) : Value
+internal sealed class CircleValue(CircleMark mark) : CurveValue
 {
+    public override CurveMark CurveMark => Mark;
+
     public CircleMark Mark { get; } = mark;
 
     public override string KindWithArticle => "a circle";

@@ -35,12 +35,7 @@ internal readonly struct Interval(double low, double high)
         if (a.Low >= 0 && b.Low >= 0)
             return Outward(a.Low * b.Low, a.High * b.High);
 
-        double p = a.Low * b.Low;
-        double q = a.Low * b.High;
-        double r = a.High * b.Low;
-        double s = a.High * b.High;
-        // Math.Min and Max pass NaN on, which Outward takes for "nothing known".
-        return Outward(Math.Min(Math.Min(p, q), Math.Min(r, s)), Math.Max(Math.Max(p, q), Math.Max(r, s)));
+        return Hull(a.Low * b.Low, a.Low * b.High, a.High * b.Low, a.High * b.High);
     }
 
     public static Interval Divide(Interval a, Interval b)
@@ -51,11 +46,7 @@ internal readonly struct Interval(double low, double high)
         if (a.Low >= 0 && b.Low > 0)
             return Outward(a.Low / b.High, a.High / b.Low);
 
-        double p = a.Low / b.Low;
-        double q = a.Low / b.High;
-        double r = a.High / b.Low;
-        double s = a.High / b.High;
-        return Outward(Math.Min(Math.Min(p, q), Math.Min(r, s)), Math.Max(Math.Max(p, q), Math.Max(r, s)));
+        return Hull(a.Low / b.Low, a.Low / b.High, a.High / b.Low, a.High / b.High);
     }
 
     /// <summary>The radicand is not negative, whatever its enclosure says.</summary>
@@ -88,6 +79,10 @@ internal readonly struct Interval(double low, double high)
         double low = Math.Max(a.Low, b.Low), high = Math.Min(a.High, b.High);
         return low <= high ? new(low, high) : a;
     }
+
+    // Math.Min and Max pass NaN on, which Outward takes for "nothing known".
+    private static Interval Hull(double p, double q, double r, double s) =>
+        Outward(Math.Min(Math.Min(p, q), Math.Min(r, s)), Math.Max(Math.Max(p, q), Math.Max(r, s)));
 
     private static Interval Outward(double low, double high)
     {

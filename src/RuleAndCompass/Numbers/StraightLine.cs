@@ -20,8 +20,6 @@ internal sealed class StraightLine
     /// <param name="IsConstant">Then <paramref name="Value"/> counts, else the operation on the instructions Left and Right.</param>
     public readonly record struct Instruction(bool IsConstant, Rational Value, Operation Operation, int Left, int Right);
 
-    public IReadOnlyList<Instruction> Instructions => instructions;
-
     /// <summary>The leaves that <c>replace</c> kept as they are; their constants count for nothing.</summary>
     public IReadOnlyDictionary<int, Real> Leaves => leaves;
 

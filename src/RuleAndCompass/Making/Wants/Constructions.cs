@@ -69,7 +69,7 @@ internal sealed partial class Constructions(Workbench bench, Sheet room, Sheet s
     private static Curve Plain(CurveMark mark) => mark switch
     {
         LineMark { Line: var line } => Line.Along(line.Start, line.Direction).WithPoints([.. line.Holds.Where(point => !ReferenceEquals(point, line.Start))]),
-        _ => (Curve)mark.Figure,
+        _ => mark.Curve,
     };
 
     /// <summary>Lays the edge to two marks, and proves that the line so drawn is <paramref name="wanted"/> before it takes its form.</summary>

@@ -14,7 +14,7 @@ internal sealed partial class WantMaker
     {
         (CurveMark first, LineValue? firstLine) = CurveIn(want.First);
         (CurveMark second, LineValue? secondLine) = CurveIn(want.Second);
-        Crossing crossing = Crossing.Of(CurveOf(first), CurveOf(second), Decider);
+        Crossing crossing = Crossing.Of(first.Curve, second.Curve, Decider);
         PointMark mark = Pick(first, second, crossing, want.Choice, want.First.ToString()!, want.Second.ToString()!, want, evaluator.NameOf(want.Point), firstLine ?? secondLine);
         Bind(want.Point, mark);
     }
@@ -23,7 +23,7 @@ internal sealed partial class WantMaker
     {
         (CurveMark first, LineValue? firstLine) = CurveIn(want.First);
         (CurveMark second, LineValue? secondLine) = CurveIn(want.Second);
-        Crossing crossing = Crossing.Of(CurveOf(first), CurveOf(second), Decider);
+        Crossing crossing = Crossing.Of(first.Curve, second.Curve, Decider);
         MustMeet(first, second, crossing, want.First.ToString()!, want.Second.ToString()!, MeetingIn(want));
         if (crossing.Points.Length < 2)
             throw new FaultException(MakingFindings.Degenerate($"`{want.First}` and `{want.Second}` meet in one point only", MeetingIn(want), $"prick one point: `prick {want.Point} where {want.First} meets {want.Second}`"));
@@ -38,8 +38,7 @@ internal sealed partial class WantMaker
 
     private (CurveMark Mark, LineValue? Line) CurveIn(Reference reference) => evaluator.Resolve(reference) switch
     {
-        LineValue line => (line.Directed.Mark, line),
-        CircleValue circle => (circle.Mark, null),
+        CurveValue curve => (curve.CurveMark, curve as LineValue),
         Value other => throw new FaultException(MakingFindings.WrongKind(reference.ToString()!, other.KindWithArticle, "a line or a circle", reference.Span, other is FamilyValue ? $"say which one: `{reference}[…]`" : null)),
     };
 

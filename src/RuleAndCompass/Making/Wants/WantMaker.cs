@@ -155,8 +155,6 @@ internal sealed partial class WantMaker(Evaluator evaluator, Workbench bench, Co
 
     private static DirectedLine Directed(LineValue line) => line.Directed;
 
-    private static Curve CurveOf(CurveMark mark) => (Curve)mark.Figure;
-
     private bool IsSame(PointValue a, PointValue b) => bench.Marks.IsSame(a.Point, b.Point);
 
     private void Apart(PointValue a, Reference nameA, PointValue b, Reference nameB)
